@@ -75,5 +75,4 @@ export interface ParsedScreen {
 }
 
 export type ParsedWorkbook =
-  | { ok: true; screen: ParsedScreen }
-  | { ok: false; issues: WorkbookIssue[] };
+  { ok: true; screen: ParsedScreen } | { ok: false; issues: WorkbookIssue[] };
