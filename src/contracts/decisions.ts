@@ -1,18 +1,7 @@
 import { z } from 'zod/v4';
+import { decisionActions, type DecisionAction, type DecisionState } from '../screening/decisions';
 
-/** Where a candidate stands. `open` is where each one begins and where reopening leads. */
-export const decisionStates = ['open', 'nominated', 'scale-up', 'waiting', 'set-aside'] as const;
-export type DecisionState = (typeof decisionStates)[number];
-
-/** What a person does to move a candidate on. */
-export const decisionActions = [
-  'nominate',
-  'take-to-scale-up',
-  'wait',
-  'set-aside',
-  'reopen',
-] as const;
-export type DecisionAction = (typeof decisionActions)[number];
+export type { DecisionAction, DecisionState };
 
 /** A decision: what, why, and the version of the candidate that the person was looking at. */
 export const decideRequestSchema = z.strictObject({

@@ -1,5 +1,14 @@
-import type { Estimate, RateLawName, ReadingDimension, Verdict, WarningCode } from '../kinetics/types';
+import type {
+  Estimate,
+  RateLawName,
+  ReadingDimension,
+  Verdict,
+  WarningCode,
+} from '../kinetics/types';
+import type { HeatmapCell } from '../screening/heatmap';
 import type { DecisionState } from './decisions';
+
+export type { HeatmapCell };
 
 /** One candidate on the leaderboard: a catalyst with its results in the current analysis. */
 export interface LeaderboardRow {
@@ -66,25 +75,8 @@ export interface CampaignSummary {
   referenceConcentration: number;
   referenceLoadingGPerL: number;
   targetConversion: number;
-}
-
-/** One cell of the heatmap: all sample wells of a catalyst at one set temperature. */
-export interface HeatmapCell {
-  temperatureK: number;
-  wells: number;
-  /** Verdict of the cell's wells when they agree, else `undetermined`. */
-  verdict: Verdict;
-  order: number | null;
-  /** Under the catalyst's law at the reference loading; null when it has none. */
-  k: number | null;
-  kUnit: string | null;
-  /** Geometric mean, base unit s⁻¹. */
-  initialRate: number | null;
-  conversion: number | null;
-  /** Share of C0. */
-  relativeResidualSd: number | null;
-  wellsWithLackOfFit: number;
-  wellIds: string[];
+  /** Standing conditions in words: gas and pressure, solvent, pH, stirring. */
+  conditions: string;
 }
 
 export interface HeatmapRow {
