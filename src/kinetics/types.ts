@@ -74,11 +74,19 @@ export interface LawFit {
   /** In the law's own unit (see `rateConstantUnit`). Null where the readings cannot give it. */
   k: number | null;
   kSe: number | null;
-  /** r0/C0 = k C0^(n−1), s⁻¹. */
-  kRel: number;
+  /** r0/C0 = k C0^(n−1) at `originS`, s⁻¹. Null for growth that shows neither C0 nor curvature. */
+  kRel: number | null;
   kRelSe: number | null;
+  /** At `originS`, base unit. */
   c0: number | null;
   c0Se: number | null;
+  /**
+   * s on the clock of the readings, where `c0` and `kRel` hold: 0, or the first reading where the
+   * curve cannot be continued back to 0.
+   */
+  originS: number;
+  /** Covariance of c0 and kRel, for bands; null where either is not estimated. */
+  covariance: number | null;
   rss: number;
   /** Null when rss is 0 or the readings are too few (n < K + 2). */
   aicc: number | null;
@@ -106,6 +114,7 @@ export type WarningCode =
   | 'low-conversion'
   | 'laws-equally-good'
   | 'no-simple-order'
+  | 'order-uncertain'
   | 'lack-of-fit'
   | 'outlier'
   | 'rising'

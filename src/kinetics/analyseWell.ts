@@ -1,0 +1,226 @@
+import type { Readings } from './fitting/readings';
+import { collectReadings, resultDimension } from './fitting/readings';
+import { requestedRateLaw } from './rateLaws/registry';
+import { estimate, finiteOrNull } from './statistics/estimate';
+import { intervalFactor } from './statistics/tDistribution';
+import type { DecaySeries, Estimate, SeriesAnalysis, WarningCode } from './types';
+import { averageInitialRate } from './verdict/averageInitialRate';
+import { testForDecay, type DecayTest } from './verdict/decayTest';
+import { fitWell, type FittedLaw, type WellFits } from './verdict/fitWell';
+import { testLackOfFit } from './verdict/lackOfFit';
+import { findOutliers } from './verdict/outliers';
+import {
+  selectRateLaw,
+  type Evidence,
+  type FreeOrder,
+  type Selection,
+} from './verdict/selectRateLaw';
+
+/** A well's analysis together with what a catalyst's pooled verdict needs of it. */
+export interface AnalysedWell {
+  series: DecaySeries;
+  analysis: SeriesAnalysis;
+  evidence: Evidence | null;
+  freeOrder: FreeOrder | null;
+  /** C at the first reading by the shown law, base unit; null where C0 is not known. */
+  firstConcentration: number | null;
+}
+
+/** Readings and distinct times below which nothing is fitted. */
+const FEWEST_READINGS = 3;
+/** Below this conversion an undetermined order is put down to it. */
+const LOW_CONVERSION = 0.5;
+/** A free order whose interval reaches farther than this says nothing. */
+const WIDEST_ORDER = 5;
+
+/**
+ * Analyses one well: fits, verdict, rate constant and initial rate.
+ *
+ * @throws RangeError when times and values differ in length, the temperature is not above 0 K, or
+ *   the forced law is not held by this engine
+ */
+export function analyseWell(series: DecaySeries): AnalysedWell {
+  if (!(series.temperatureK > 0)) {
+    throw new RangeError(`temperatureK must be above 0, got ${series.temperatureK}`);
+  }
+  const forced = requestedRateLaw(series.law);
+  const readings = collectReadings(series);
+  const blank = emptyAnalysis(series, readings);
+  const few = readings.values.length < FEWEST_READINGS;
+  if (few || readings.distinctTimes < FEWEST_READINGS) {
+    blank.warnings.push(few ? 'too-few-readings' : 'too-few-distinct-times');
+    return { series, analysis: blank, evidence: null, freeOrder: null, firstConcentration: null };
+  }
+
+  const fits = fitWell(series, readings, forced);
+  const first = fits.laws.find((fitted) => fitted.law.order === 1)!;
+  const decay = testForDecay(
+    readings,
+    series.kind,
+    first.relative.rss,
+    first.relative.kRel === null || first.relative.kRel > 0,
+  );
+  if (decay.outcome !== 'decays') return describeDeadWell(series, readings, blank, fits, decay);
+
+  const selection: Selection =
+    fits.evidence === null
+      ? {
+          verdict: 'undetermined',
+          order: null,
+          best: bestOf(fits).law.name,
+          warnings: ['too-few-for-order'],
+        }
+      : selectRateLaw(fits.evidence, fits.apparentOrder);
+  const asserted =
+    forced ??
+    (selection.order === null
+      ? null
+      : (fits.laws.find((fitted) => fitted.law.name === selection.verdict)?.law ?? null));
+  const shown = fits.laws.find((fitted) => fitted.law === asserted) ?? bestOf(fits);
+  const analysis = describeReactingWell(series, readings, blank, fits, selection, shown);
+  return {
+    series,
+    analysis,
+    evidence: fits.evidence,
+    freeOrder: fits.apparentOrder,
+    firstConcentration: shown.firstConcentration,
+  };
+}
+
+function bestOf(fits: WellFits): FittedLaw {
+  return fits.laws.reduce((best, fitted) => (fitted.criterion < best.criterion ? fitted : best));
+}
+
+function emptyAnalysis(series: DecaySeries, readings: Readings): SeriesAnalysis {
+  return {
+    id: series.id,
+    catalyst: series.catalyst,
+    role: series.role,
+    block: series.block,
+    temperatureK: series.temperatureK,
+    dimension: resultDimension(series),
+    kind: series.kind,
+    loadingGPerL: series.loadingGPerL,
+    law: series.law,
+    verdict: 'unusable',
+    order: null,
+    k: null,
+    kUnit: null,
+    kRel: null,
+    c0: null,
+    conversion: null,
+    initialRate: null,
+    apparentOrder: null,
+    fits: {},
+    shownLaw: null,
+    residualSd: null,
+    lackOfFit: null,
+    outliers: [],
+    pointsUsed: readings.values.length,
+    pointsExcluded: readings.excluded,
+    warnings: readings.unsorted ? ['unsorted-times'] : [],
+  };
+}
+
+/** A well that shows no reaction: its signed rate, so that an upper limit can be read off. */
+function describeDeadWell(
+  series: DecaySeries,
+  readings: Readings,
+  blank: SeriesAnalysis,
+  fits: WellFits,
+  decay: DecayTest,
+): AnalysedWell {
+  const zero = fits.laws.find((fitted) => fitted.law.order === 0)!;
+  const perReading =
+    series.kind === 'product'
+      ? 1 / series.productPerReactant
+      : series.kind === 'conversion'
+        ? (series.initialConcentration ?? 1)
+        : 1;
+  const rateSe = decay.rateSe === null ? null : decay.rateSe * perReading;
+  const analysis: SeriesAnalysis = {
+    ...blank,
+    verdict: 'no-reaction',
+    c0: estimate(zero.fit.c0, zero.fit.c0Se, zero.fit.dof),
+    conversion: decay.conversion,
+    initialRate: estimate(decay.rate * perReading, rateSe, decay.dof),
+    fits: fits.byName,
+    shownLaw: 'zero',
+    residualSd: zero.fit.residualSd,
+    lackOfFit: testLackOfFit(zero.relative.residuals),
+    outliers: findOutliers(zero.relative, readings.indices),
+    warnings: [...blank.warnings],
+  };
+  if (decay.outcome === 'rises') analysis.warnings.push('rising');
+  if (analysis.outliers.length > 0) analysis.warnings.push('outlier');
+  return {
+    series,
+    analysis,
+    evidence: null,
+    freeOrder: null,
+    firstConcentration: zero.firstConcentration,
+  };
+}
+
+function describeReactingWell(
+  series: DecaySeries,
+  readings: Readings,
+  blank: SeriesAnalysis,
+  fits: WellFits,
+  selection: Selection,
+  shown: FittedLaw,
+): SeriesAnalysis {
+  const isForced = series.law !== 'auto';
+  const lackOfFit = testLackOfFit(shown.relative.residuals);
+  const misses = !isForced && selection.order !== null && lackOfFit.significant;
+  const isAsserted = isForced || (selection.order !== null && !misses);
+  const { fit, law, initialRate } = shown;
+  const warnings: WarningCode[] = [...blank.warnings];
+  if (!isForced) warnings.push(...selection.warnings);
+  if (misses) warnings.push('no-simple-order');
+  if (lackOfFit.significant) warnings.push('lack-of-fit');
+  if (
+    !isAsserted &&
+    selection.verdict === 'undetermined' &&
+    (shown.conversion ?? 0) < LOW_CONVERSION
+  ) {
+    warnings.push('low-conversion');
+  }
+  if (isAsserted && fit.k === null && blank.dimension === 'ratio') {
+    warnings.push('initial-concentration-needed');
+  }
+  if (fits.exact) warnings.push('exact-fit');
+  const outliers = findOutliers(shown.relative, readings.indices);
+  if (outliers.length > 0) warnings.push('outlier');
+
+  const rates = fits.laws
+    .filter((fitted) => fitted.law.name !== 'order')
+    .map((fitted) => ({ ...fitted.initialRate, criterion: fitted.criterion }));
+  const k = isAsserted ? estimate(fit.k, fit.kSe, fit.dof) : null;
+  return {
+    ...blank,
+    verdict: isForced ? 'forced' : misses ? 'other' : selection.verdict,
+    order: isAsserted ? law.order : null,
+    k,
+    kUnit: k === null ? null : law.kUnit(blank.dimension),
+    kRel: isAsserted ? estimate(fit.kRel, fit.kRelSe, fit.dof) : null,
+    c0: estimate(fit.c0, fit.c0Se, fit.dof),
+    conversion: shown.conversion,
+    initialRate: isAsserted
+      ? estimate(initialRate.value, initialRate.se, fit.dof)
+      : averageInitialRate(rates, fit.dof),
+    apparentOrder: freeOrderEstimate(fits.apparentOrder),
+    fits: fits.byName,
+    shownLaw: law.name,
+    residualSd: finiteOrNull(fit.residualSd),
+    lackOfFit,
+    outliers,
+    warnings,
+  };
+}
+
+function freeOrderEstimate(free: FreeOrder | null): Estimate | null {
+  if (free?.orderSe == null) return null;
+  const half = free.orderSe * intervalFactor(free.dof);
+  return half <= WIDEST_ORDER ? estimate(free.order, free.orderSe, free.dof) : null;
+}

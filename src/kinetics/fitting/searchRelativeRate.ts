@@ -1,0 +1,103 @@
+import type { RateLaw } from '../rateLaws/rateLaw';
+import type { FitProblem } from './problem';
+import { lowestInBracket, rootInBracket } from './rootInBracket';
+
+/** The best kRel of a law for scaled readings, its amplitude profiled out. */
+export interface RelativeRate {
+  /** Scaled kRel. */
+  kRel: number;
+  /** Scaled amplitude A. */
+  amplitude: number;
+  rss: number;
+  /** True when the search ended at the end of its range: kRel is then only a bound. */
+  atBound: boolean;
+}
+
+/** Scaled kRel below which growth cannot be told from a straight line. */
+const LEAST_GROWTH = 1e-6;
+const MOST_STEPS = 1e3;
+const FARTHEST = 1e10;
+
+function searchGrid(problem: FitProblem, law: RateLaw): number[] {
+  const top = Math.min(MOST_STEPS / problem.firstStep, FARTHEST);
+  const grid: number[] = [];
+  if (problem.mode === 'growth') {
+    for (let k = LEAST_GROWTH; k < 0.01; k *= 3.1) grid.push(k);
+  } else {
+    const bottom = Math.max(0.9 * law.lowestU, -5);
+    grid.push(bottom, 0.4 * bottom, 0.1 * bottom, 0.01 * bottom, 0);
+  }
+  for (let k = 0.01; k < top; k *= 1.8) grid.push(k);
+  grid.push(top);
+  return grid;
+}
+
+/**
+ * Global least-squares kRel of one law: the amplitude is linear and drops out (Golub & Pereyra
+ * 1973), a grid over the decades brackets every minimum, and the two best are refined on the
+ * analytic gradient to the last digits.
+ */
+export function searchRelativeRate(problem: FitProblem, law: RateLaw): RelativeRate {
+  const { t, y, mode } = problem;
+  const n = t.length;
+  const shape = new Float64Array(n);
+  let amplitude = 1;
+  let gradient = 0;
+
+  const rssAt = (kRel: number): number => {
+    let yy = 0;
+    let ff = 0;
+    for (let i = 0; i < n; i += 1) {
+      const u = kRel * t[i]!;
+      const f = mode === 'decay' ? law.relative(u) : law.converted(u);
+      shape[i] = f;
+      yy += f * y[i]!;
+      ff += f * f;
+    }
+    amplitude = mode === 'fraction' ? 1 : ff > 0 ? yy / ff : 0;
+    let rss = 0;
+    for (let i = 0; i < n; i += 1) rss += (y[i]! - amplitude * shape[i]!) ** 2;
+    return rss;
+  };
+  // dRSS/dkRel; the profiled amplitude contributes nothing to it.
+  const gradientAt = (kRel: number): number => {
+    rssAt(kRel);
+    gradient = 0;
+    for (let i = 0; i < n; i += 1) {
+      const slope = t[i]! * law.slope(kRel * t[i]!);
+      gradient += (y[i]! - amplitude * shape[i]!) * amplitude * (mode === 'decay' ? slope : -slope);
+    }
+    return -2 * gradient;
+  };
+
+  const grid = searchGrid(problem, law);
+  const heights = grid.map(rssAt);
+  const minima = grid
+    .map((_, j) => j)
+    .filter(
+      (j) =>
+        heights[j]! <= (heights[j - 1] ?? Infinity) && heights[j]! <= (heights[j + 1] ?? Infinity),
+    )
+    .sort((a, b) => heights[a]! - heights[b]! || a - b)
+    .slice(0, 2);
+
+  let best: { kRel: number; rss: number } | null = null;
+  for (const j of minima) {
+    const low = grid[Math.max(j - 1, 0)]!;
+    const high = grid[Math.min(j + 1, grid.length - 1)]!;
+    const atLow = gradientAt(low);
+    const atHigh = gradientAt(high);
+    const candidates = [grid[j]!];
+    if (atLow < 0 && atHigh > 0)
+      candidates.push(rootInBracket(gradientAt, low, high, atLow, atHigh));
+    else if (j > 0 && j < grid.length - 1) candidates.push(lowestInBracket(rssAt, low, high));
+    for (const kRel of candidates) {
+      const rss = rssAt(kRel);
+      // The refined root wins a tie: at the floor of rounding rss no longer tells them apart.
+      if (best === null || rss <= best.rss) best = { kRel, rss };
+    }
+  }
+  const kRel = best?.kRel ?? 0;
+  const rss = rssAt(kRel);
+  return { kRel, amplitude, rss, atBound: kRel <= grid[0]! || kRel >= grid[grid.length - 1]! };
+}

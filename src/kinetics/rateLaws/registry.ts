@@ -1,0 +1,35 @@
+import type { LawRequest, RateLawName } from '../types';
+import { apparentOrder } from './apparentOrder';
+import { firstOrder } from './firstOrder';
+import type { RateLaw } from './rateLaw';
+import { secondOrder } from './secondOrder';
+import { zerothOrder } from './zerothOrder';
+
+/**
+ * The laws that the engine tries on every well and chooses between. A new law is a file of its own
+ * beside this one and an entry here.
+ */
+export const rateLaws: readonly RateLaw[] = [zerothOrder, firstOrder, secondOrder];
+
+/** The law of a registered name; null for laws that are not tried on every well. */
+export function findRateLaw(name: RateLawName): RateLaw | null {
+  return rateLaws.find((law) => law.name === name) ?? null;
+}
+
+/** The law of a name with, for `order`, its number; null when this engine does not hold it. */
+export function rateLawOf(name: RateLawName, order: number | null): RateLaw | null {
+  return name === 'order' ? (order === null ? null : apparentOrder(order)) : findRateLaw(name);
+}
+
+/**
+ * The law that a caller forces, or null for the machine's choice.
+ *
+ * @throws RangeError for a law that this engine version does not hold, or an order out of range
+ */
+export function requestedRateLaw(request: LawRequest): RateLaw | null {
+  if (request === 'auto') return null;
+  if (typeof request === 'object') return apparentOrder(request.order);
+  const law = findRateLaw(request);
+  if (law === null) throw new RangeError(`engine does not hold the law "${request}" yet`);
+  return law;
+}

@@ -1,0 +1,88 @@
+import type { ApparentOrderFit } from '../fitting/fitApparentOrder';
+import { evidenceRatio } from '../statistics/goodnessOfFit';
+import { intervalFactor } from '../statistics/tDistribution';
+import type { RateLawName, WarningCode } from '../types';
+
+/** AICc of one law, on readings that all laws share. */
+export interface LawEvidence {
+  name: RateLawName;
+  order: number;
+  aicc: number;
+}
+
+/** What the choice between the laws rests on, for one well or summed over many. */
+export interface Evidence {
+  laws: LawEvidence[];
+  /** AICc of the curves with one more parameter, by name; absent where readings are too few. */
+  rivals: Partial<Record<'order' | 'plateau' | 'deactivating', number>>;
+}
+
+/** Free order with its standard error. */
+export type FreeOrder = Pick<ApparentOrderFit, 'order' | 'orderSe' | 'dof'>;
+
+export interface Selection {
+  verdict: 'zero' | 'first' | 'second' | 'other' | 'undetermined';
+  order: number | null;
+  /** The law with the lowest AICc, asserted or not. */
+  best: RateLawName;
+  warnings: WarningCode[];
+}
+
+/** An order is asserted when it has this many times the support of each other order. */
+export const EVIDENCE_TO_ASSERT = 10;
+/** A rival must have this many times the support of the best order to say that none holds. */
+export const EVIDENCE_FOR_OTHER = 30;
+/** How far the free order's interval may reach from the whole number that is asserted. */
+export const ORDER_TOLERANCE: Readonly<Record<number, number>> = { 0: 0.3, 1: 0.4, 2: 0.75 };
+
+/** True when the free order's 95 % interval lies within the tolerance of a whole order. */
+export function orderAgrees(free: FreeOrder | null, whole: number): boolean {
+  if (free?.orderSe == null) return false;
+  const reach = Math.abs(free.order - whole) + intervalFactor(free.dof) * free.orderSe;
+  return reach <= (ORDER_TOLERANCE[whole] ?? 0);
+}
+
+/**
+ * Chooses between zero, first and second order, or says why not.
+ *
+ * An order is asserted when the evidence ratio (Burnham & Anderson 2002) over the two others is at
+ * least 10, no curve with one more parameter describes the readings better, zero and second order
+ * beat a level that stays and a dying catalyst by 10 too, and the free order lies near the whole
+ * number. Otherwise `other` where a rival tells that none holds, else `undetermined`.
+ *
+ * @param evidence at least 2 laws
+ */
+export function selectRateLaw(evidence: Evidence, free: FreeOrder | null): Selection {
+  const ranked = [...evidence.laws].sort((a, b) => a.aicc - b.aicc);
+  const best = ranked[0]!;
+  const rivals = Object.values(evidence.rivals);
+  const strongest = Math.min(...rivals, Infinity);
+  const refuse = (verdict: 'other' | 'undetermined', warning: WarningCode): Selection => ({
+    verdict,
+    order: null,
+    best: best.name,
+    warnings: [warning],
+  });
+
+  if (evidenceRatio(strongest, best.aicc) >= EVIDENCE_FOR_OTHER) {
+    return refuse('other', 'no-simple-order');
+  }
+  if (evidenceRatio(best.aicc, ranked[1]!.aicc) < EVIDENCE_TO_ASSERT) {
+    return refuse('undetermined', 'laws-equally-good');
+  }
+  const departure = Math.min(
+    evidence.rivals.plateau ?? Infinity,
+    evidence.rivals.deactivating ?? Infinity,
+  );
+  const needed = best.order === 1 ? 1 : EVIDENCE_TO_ASSERT;
+  if (strongest < best.aicc || evidenceRatio(best.aicc, departure) < needed) {
+    return refuse('undetermined', 'no-simple-order');
+  }
+  if (!orderAgrees(free, best.order)) return refuse('undetermined', 'order-uncertain');
+  return {
+    verdict: best.name as 'zero' | 'first' | 'second',
+    order: best.order,
+    best: best.name,
+    warnings: [],
+  };
+}
