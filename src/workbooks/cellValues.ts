@@ -102,7 +102,11 @@ function fromText(
   refuse: Refuse,
 ): NumberCell {
   const parsed = parseNumberText(cell.text, table.sheet.decimalSign);
-  if (parsed.kind === 'missing' || parsed.kind === 'censored') return { state: parsed.kind };
+  if (parsed.kind === 'missing') return { state: 'missing' };
+  if (parsed.kind === 'censored') {
+    if (column.key === 'reading') return { state: 'censored' };
+    return refuseText({ kind: 'not-a-number' }, column, table.sheet.decimalSign, refuse);
+  }
   if (parsed.kind !== 'number') return refuseText(parsed, column, table.sheet.decimalSign, refuse);
   noteFormula(table, column, row, cell, context);
   if (table.sheet.origin === 'xlsx') {
