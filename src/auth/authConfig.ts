@@ -1,3 +1,4 @@
+import { skipCSRFCheck } from '@auth/core';
 import Credentials from '@auth/core/providers/credentials';
 import { defineConfig } from 'auth-astro';
 import { z } from 'zod/v4';
@@ -16,6 +17,8 @@ export default defineConfig({
   secret: process.env.AUTH_SECRET,
   // src/server has put the public address of APP_URL into the request.
   trustHost: true,
+  // src/middleware.ts refuses unsafe requests from other origins, these included.
+  skipCSRFCheck,
   session: { strategy: 'jwt', maxAge: sessionMs / 1000 },
   pages: { signIn: '/sign-in', signOut: '/sign-in', error: '/sign-in' },
   providers: [

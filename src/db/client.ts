@@ -26,5 +26,5 @@ export function poolOptions(url: string): PoolOptions {
 export function openDatabase(url: string): DatabaseHandle {
   const pool: Pool = createPool(poolOptions(url));
   const db = drizzle(pool, { schema, mode: 'default', casing: 'snake_case' });
-  return { db: db as unknown as Database, close: () => pool.end() };
+  return { db, close: () => pool.end() };
 }

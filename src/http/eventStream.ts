@@ -12,13 +12,15 @@ export function eventStream(event: string, values: AsyncIterable<unknown>): Resp
       }, keepAliveMs);
     },
     async pull(controller) {
-      const { done, value } = await iterator.next();
-      if (done) {
+      const step = await iterator.next();
+      if (step.done) {
         clearInterval(timer);
         controller.close();
         return;
       }
-      controller.enqueue(encoder.encode(`event: ${event}\ndata: ${JSON.stringify(value)}\n\n`));
+      controller.enqueue(
+        encoder.encode(`event: ${event}\ndata: ${JSON.stringify(step.value)}\n\n`),
+      );
     },
     async cancel() {
       clearInterval(timer);

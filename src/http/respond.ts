@@ -1,4 +1,4 @@
-import { Problem } from '../errors';
+import type { Problem } from '../errors';
 
 const noStore = { 'cache-control': 'no-store' };
 

@@ -54,10 +54,9 @@ function readForm(request: Request): Promise<Form> {
 
 /** The last part of a path, so that a name never is one, without control characters. */
 const plainFileName = (name: string) =>
-  // eslint-disable-next-line no-control-regex -- control characters are what is taken out
   name
     .replace(/^.*[\\/]/, '')
-    .replace(/[\u0000-\u001f\u007f]/g, '')
+    .replace(/\p{Cc}/gu, '')
     .slice(0, 255) || 'workbook';
 
 /**

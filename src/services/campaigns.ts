@@ -38,6 +38,14 @@ export async function listCampaignSummaries(
   return (await listCampaigns(db, groupId)).map(summariseCampaign);
 }
 
+/** The campaigns of all the viewer's groups, group by group. */
+export async function listOwnCampaigns(db: Database, viewer: Viewer): Promise<CampaignSummary[]> {
+  const lists = await Promise.all(
+    groupIdsOf(viewer).map((groupId) => listCampaignSummaries(db, viewer, groupId)),
+  );
+  return lists.flat();
+}
+
 /** The campaign, if the viewer is in its group. @throws Problem 404 otherwise. */
 export async function requireCampaign(
   db: Database,
@@ -91,4 +99,31 @@ export async function createCampaign(
     });
   });
   return summariseCampaign(row);
+}
+
+/**
+ * The same view, if the address names the group and campaign that it belongs to.
+ *
+ * @throws Problem 404 when it does not: an address is right as a whole or not at all.
+ */
+export function requireInGroup<View extends { campaign: CampaignSummary }>(
+  groupId: string,
+  view: View,
+  campaignId = view.campaign.id,
+): View {
+  if (view.campaign.groupId !== groupId || view.campaign.id !== campaignId) {
+    throw problems.notFound();
+  }
+  return view;
+}
+
+/** A campaign by the address of its page. @throws Problem 404 when the viewer is not in the group. */
+export async function loadCampaignIn(
+  db: Database,
+  viewer: Viewer,
+  groupId: string,
+  campaignId: string,
+): Promise<CampaignSummary> {
+  const campaign = summariseCampaign(await requireCampaign(db, viewer, campaignId));
+  return requireInGroup(groupId, { campaign }).campaign;
 }

@@ -1,5 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { can, permissionFor, requirePermission, requireViewer } from '../../../src/auth/permissions';
+import {
+  can,
+  permissionFor,
+  requirePermission,
+  requireViewer,
+} from '../../../src/auth/permissions';
 import { roles, type Role } from '../../../src/auth/roles';
 import type { Viewer } from '../../../src/auth/viewer';
 
@@ -13,7 +18,10 @@ const viewer = (role: Role): Viewer => ({
 
 describe('permissions', () => {
   it.each([
-    ['viewer', { read: true, upload: false, nominate: false, decide: false, defineCampaign: false }],
+    [
+      'viewer',
+      { read: true, upload: false, nominate: false, decide: false, defineCampaign: false },
+    ],
     ['analyst', { read: true, upload: true, nominate: true, decide: false, defineCampaign: false }],
     ['lead', { read: true, upload: true, nominate: true, decide: true, defineCampaign: true }],
     ['admin', { read: true, upload: true, nominate: true, decide: true, defineCampaign: true }],
@@ -40,7 +48,10 @@ describe('permissions', () => {
 
   it('refuse a role that is too low with 403 and the role it takes', () => {
     expect(() => requirePermission(viewer('viewer'), 'own', 'upload')).toThrow(
-      expect.objectContaining({ status: 403, detail: expect.stringContaining('analyst') as string }),
+      expect.objectContaining({
+        status: 403,
+        detail: expect.stringContaining('analyst') as string,
+      }),
     );
   });
 

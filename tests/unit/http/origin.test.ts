@@ -18,7 +18,10 @@ describe('requests that change something', () => {
     ['nowhere that can be told', {}],
     ['a cross-site fetch', { 'sec-fetch-site': 'cross-site' }],
     ['a sibling host', { 'sec-fetch-site': 'same-site' }],
-    ['a foreign JSON request', { origin: 'https://elsewhere.example', 'content-type': 'application/json' }],
+    [
+      'a foreign JSON request',
+      { origin: 'https://elsewhere.example', 'content-type': 'application/json' },
+    ],
   ])('are refused from %s', (_from, headers) => {
     expect(post(headers)).toBe(false);
   });

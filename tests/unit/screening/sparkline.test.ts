@@ -27,11 +27,17 @@ describe('the small decay on the leaderboard', () => {
     expect(pairs).toHaveLength(16);
     expect(pairs[0]).toEqual([0, 1]);
     expect(pairs.at(-1)?.[0]).toBe(99 * 60);
-    expect(pairs.map(([time]) => time)).toEqual(pairs.map(([time]) => time).toSorted((a, b) => a - b));
+    expect(pairs.map(([time]) => time)).toEqual(
+      pairs.map(([time]) => time).toSorted((a, b) => a - b),
+    );
   });
 
   it('leaves out missing readings and draws nothing for a well without any', () => {
-    const pairs = thinDecay([well('a', 0.5)], () => ({ timesS: [0, 1, 2], values: [2, null, 1] }), 16);
+    const pairs = thinDecay(
+      [well('a', 0.5)],
+      () => ({ timesS: [0, 1, 2], values: [2, null, 1] }),
+      16,
+    );
     expect(pairs).toEqual([
       [0, 1],
       [2, 0.5],

@@ -3,9 +3,13 @@ import { requireViewer } from '@/auth/permissions';
 import { createCampaignRequestSchema } from '@/contracts/campaigns';
 import { campaignHref } from '@/contracts/links';
 import { parseBody } from '@/http/parse';
-import { created } from '@/http/respond';
-import { createCampaign } from '@/services/campaigns';
+import { created, json } from '@/http/respond';
+import { createCampaign, listOwnCampaigns } from '@/services/campaigns';
 import { getServices } from '@/services/runtime';
+
+/** The campaigns of all the caller's groups. */
+export const GET: APIRoute = async ({ locals }) =>
+  json({ campaigns: await listOwnCampaigns(getServices().db, requireViewer(locals.viewer)) });
 
 export const POST: APIRoute = async ({ request, locals }) => {
   const viewer = requireViewer(locals.viewer);
