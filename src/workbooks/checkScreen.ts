@@ -1,5 +1,6 @@
 import { findLookAlikes } from './catalystCodes';
 import type { ReadingContext, ScreenRows, WellReadings, WellRow } from './reading';
+import { counted } from './tally';
 import type { ParsedPlate } from './types';
 import { fitsOn, guessFormat, lastWell, type PlateFormat } from './wellPosition';
 
@@ -76,26 +77,40 @@ function checkCodes(rows: ScreenRows, { issues }: ReadingContext): void {
 /** Share of the screen's largest reading within which a negative reading is noise around zero. */
 const NOISE_SHARE = 0.05;
 
-function checkNegatives(rows: ScreenRows, { issues }: ReadingContext): void {
-  const tolerance = NOISE_SHARE * largestReading(rows);
+function checkNegatives(rows: ScreenRows, { issues, tally }: ReadingContext): void {
   if (rows.kind === 'conversion') return;
+  const tolerance = rows.kind === 'signal' ? Infinity : NOISE_SHARE * largestReading(rows);
   for (const well of rows.readings.values()) {
     for (const [index, value] of well.values.entries()) {
       if (value === null || value >= 0) continue;
-      const place = { sheet: well.sheet, cell: `${well.column}${well.rows[index]}` };
-      const kept = rows.kind === 'signal' || value >= -tolerance;
-      issues.add({
-        severity: kept ? 'caution' : 'stop',
-        code: kept ? 'negative-reading' : 'reading-negative',
-        ...place,
-        found: String(value),
-        expected: 'a reading of at least 0, within its noise',
-        message: kept
-          ? `${place.cell}: a negative reading close to zero is kept as noise.`
-          : `${place.cell}: the reading lies further below zero than noise would. Correct it, or clear the cell.`,
-      });
+      const cell = `${well.column}${well.rows[index]}`;
+      const issue = {
+        sheet: well.sheet,
+        cell,
+        found: asWritten(rows, value),
+        expected: 'readings of at least 0, within their noise',
+      };
+      if (value >= -tolerance) {
+        tally.count('negative', {
+          ...issue,
+          code: 'negative-kept',
+          message: (count) =>
+            `${counted(count, 'reading')} just below zero, from ${cell} on, kept as noise around zero.`,
+        });
+      } else {
+        issues.stop({
+          ...issue,
+          code: 'negative-reading',
+          message: `${cell}: the reading lies further below zero than noise would. Correct it, or clear the cell.`,
+        });
+      }
     }
   }
+}
+
+/** A value of the base unit as it stood in the file. */
+function asWritten(rows: ScreenRows, value: number): string {
+  return `${Number((value / rows.readingFactor).toPrecision(6))} ${rows.readingUnit}`;
 }
 
 function largestReading(rows: ScreenRows): number {
@@ -121,7 +136,7 @@ function checkMagnitudes(rows: ScreenRows, { issues }: ReadingContext): void {
       code: 'magnitude-differs',
       sheet: well.sheet,
       cell: `${well.column}${well.rows[0]}`,
-      found: String(peak),
+      found: asWritten(rows, peak),
       expected: `readings in ${rows.readingUnit} in every well`,
       message: `The readings of well ${well.position} of ${well.plate} differ from the other wells by more than a factor of ${MAGNITUDE_FACTOR}. Check that they are in ${rows.readingUnit}.`,
     });

@@ -32,6 +32,8 @@ export interface ReadingUnits {
   dimension: ReadingDimension;
   kind: ReadingKind;
   readingUnit: string;
+  /** Base unit over the unit as written, to show readings as they stand in the file. */
+  readingFactor: number;
   timeUnit: string;
 }
 
@@ -203,6 +205,7 @@ function readingUnits(table: Table, context: ReadingContext): ReadingUnits | nul
     return {
       ...meaning,
       readingUnit: column.unit?.symbol ?? readingUnit,
+      readingFactor: column.unit?.factor ?? 1,
       timeUnit: time.unit?.symbol ?? '',
     };
   }

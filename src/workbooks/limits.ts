@@ -30,6 +30,6 @@ export const DEFAULT_LIMITS: WorkbookLimits = {
   ratioFloorBytes: MEGABYTE,
   rows: 400_100,
   columns: 256,
-  textLength: 120,
+  textLength: 64,
   issues: 500,
 };

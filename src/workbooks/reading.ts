@@ -45,6 +45,8 @@ export interface ScreenRows {
   dimension: ReadingDimension;
   kind: ReadingKind;
   readingUnit: string;
+  /** Base unit over the unit as written. */
+  readingFactor: number;
   timeUnit: string;
   wells: Map<string, WellRow>;
   readings: Map<string, WellReadings>;
