@@ -100,6 +100,7 @@ function emptyAnalysis(series: DecaySeries, readings: Readings): SeriesAnalysis 
     temperatureK: series.temperatureK,
     dimension: resultDimension(series),
     kind: series.kind,
+    productPerReactant: series.productPerReactant,
     loadingGPerL: series.loadingGPerL,
     law: series.law,
     verdict: 'unusable',

@@ -144,6 +144,8 @@ export interface SeriesAnalysis {
   temperatureK: number;
   dimension: ReadingDimension;
   kind: ReadingKind;
+  /** As given; curves of `product` need it. */
+  productPerReactant: number;
   loadingGPerL: number | null;
   law: LawRequest;
   verdict: Verdict;
@@ -180,6 +182,11 @@ export interface ReferenceConditions {
   temperatureK: number | null;
   /** Base unit of the readings. */
   concentration: number | null;
+  /**
+   * Dimension of `concentration`; without it, that of each catalyst. A catalyst of another
+   * dimension gets no rate and no time at the reference.
+   */
+  concentrationDimension?: ReadingDimension | null;
   loadingGPerL: number | null;
   /** 0 < X < 1. */
   targetConversion: number | null;

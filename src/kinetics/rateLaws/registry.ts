@@ -33,3 +33,8 @@ export function requestedRateLaw(request: LawRequest): RateLaw | null {
   if (law === null) throw new RangeError(`engine does not hold the law "${request}" yet`);
   return law;
 }
+
+/** The name under which a well's fits hold an order: a registered law's, else `order`. */
+export function lawOfOrder(order: number): RateLawName {
+  return rateLaws.find((law) => law.order === order)?.name ?? 'order';
+}

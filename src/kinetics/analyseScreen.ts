@@ -1,0 +1,41 @@
+import { analyseWell, type AnalysedWell } from './analyseWell';
+import { analyseCatalyst } from './catalyst/analyseCatalyst';
+import { ENGINE_VERSION } from './constants';
+import type { DecaySeries, ReferenceConditions, ScreenAnalysis, WellRole } from './types';
+
+const RANKED: readonly WellRole[] = ['sample', 'benchmark'];
+const BLANK: readonly WellRole[] = ['blank', 'support-blank'];
+
+/**
+ * Analyses every well of a screen and every catalyst in it, in the order of first appearance.
+ *
+ * @param onProgress called after each well with the number done
+ * @throws RangeError as `analyseWell` does
+ */
+export function analyseScreen(
+  series: readonly DecaySeries[],
+  reference: ReferenceConditions,
+  onProgress?: (done: number, total: number) => void,
+): ScreenAnalysis {
+  const wells = series.map((one, i) => {
+    const well = analyseWell(one);
+    onProgress?.(i + 1, series.length);
+    return well;
+  });
+  const blanks = wells.filter((well) => BLANK.includes(well.series.role));
+  const byCatalyst = new Map<string, AnalysedWell[]>();
+  for (const well of wells) {
+    const { catalyst, role } = well.series;
+    if (catalyst === null || !RANKED.includes(role)) continue;
+    const own = byCatalyst.get(catalyst);
+    if (own === undefined) byCatalyst.set(catalyst, [well]);
+    else own.push(well);
+  }
+  return {
+    engine: ENGINE_VERSION,
+    series: wells.map((well) => well.analysis),
+    catalysts: [...byCatalyst].map(([catalyst, own]) =>
+      analyseCatalyst(catalyst, own, reference, blanks),
+    ),
+  };
+}

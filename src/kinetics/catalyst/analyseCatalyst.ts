@@ -1,0 +1,180 @@
+import type { AnalysedWell } from '../analyseWell';
+import { rateLawOf } from '../rateLaws/registry';
+import type { RateLaw } from '../rateLaws/rateLaw';
+import type {
+  CatalystAnalysis,
+  LawFit,
+  LawRequest,
+  RateLawName,
+  ReferenceConditions,
+  Verdict,
+  WarningCode,
+} from '../types';
+import { describeByInitialRate } from './initialRateBasis';
+import { describeByLaw } from './lawBasis';
+import { poolEvidence, type PooledVerdict } from './poolEvidence';
+import { fitUnder, type BasisResult, type PooledWell } from './pooledWell';
+import { poolLoading } from './poolLoading';
+import { countTemperatures } from './temperatures';
+import { warnOfTemperatures } from './temperatureWarnings';
+
+const NOTHING: BasisResult = {
+  kUnit: null,
+  kRef: null,
+  kRefTemperatureK: null,
+  rateRef: null,
+  timeToTarget: null,
+  bracket: false,
+  arrhenius: null,
+  activationEnergy: null,
+  initialRateActivationEnergy: null,
+  lnA: null,
+};
+
+/**
+ * Analyses one catalyst over all its wells: the law they share, the rate constant at the reference
+ * conditions, and the apparent activation energy.
+ *
+ * @param wells its samples (or benchmarks), at least one; wells whose results have another
+ *   dimension than the first usable one's are left out
+ * @param blanks wells without the catalyst, anywhere in the screen
+ */
+export function analyseCatalyst(
+  catalyst: string,
+  wells: readonly AnalysedWell[],
+  reference: ReferenceConditions,
+  blanks: readonly AnalysedWell[] = [],
+): CatalystAnalysis {
+  const usable = wells.filter((well) => well.analysis.verdict !== 'unusable');
+  const dimension = (usable[0] ?? wells[0])?.analysis.dimension ?? 'concentration';
+  const same = usable.filter((well) => well.analysis.dimension === dimension);
+  const reacting = same.filter((well) => well.analysis.verdict !== 'no-reaction');
+  const loading = poolLoading(
+    reacting.map((well) => well.series.loadingGPerL),
+    reference.loadingGPerL,
+  );
+  const pooled = reacting.flatMap((well, i): PooledWell[] => {
+    const factor = loading.factors[i]!;
+    return factor === null ? [] : [{ ...well, factor }];
+  });
+  const warnings: WarningCode[] = [];
+  const decided = decide(wells, pooled, warnings);
+  const law = decided.law;
+
+  let basis = NOTHING;
+  if (pooled.length > 0) {
+    warnings.push(...loading.warnings);
+    basis =
+      law === null
+        ? describeByInitialRate(pooled, dimension, reference)
+        : describeByLaw(pooled, law, dimension, reference);
+    warnings.push(...warnOfTemperatures(pooled, basis.arrhenius, reference));
+    if (blanksReact(blanks, pooled)) warnings.push('blank-reacts');
+  }
+  const rateRefPerMass = perMass(
+    basis.rateRef,
+    dimension === 'concentration' ? loading.loadingGPerL : null,
+  );
+  const fits = pooled.map((well) => fitUnder(well, law)).filter((fit) => fit !== null);
+  return {
+    catalyst,
+    dimension,
+    verdict: decided.verdict,
+    order: law === null ? null : law.order,
+    basis: law === null ? 'initial-rate' : 'law',
+    ...basis,
+    rateRefPerMass,
+    turnoverFrequency: perSite(rateRefPerMass, pooled),
+    loadingGPerL: pooled.length > 0 ? loading.loadingGPerL : null,
+    conversion: largest(same.map((well) => well.analysis.conversion)),
+    relativeResidualSd: relativeResidualSd(fits),
+    wellsWithLackOfFit: pooled.filter((well) => well.analysis.lackOfFit?.significant === true)
+      .length,
+    temperatures: countTemperatures(same.map((well) => well.series.temperatureK)),
+    wells: same.length,
+    seriesIds: wells.map((well) => well.series.id),
+    weights: decided.weights,
+    warnings: [...new Set(warnings)],
+  };
+}
+
+function decide(
+  wells: readonly AnalysedWell[],
+  pooled: readonly PooledWell[],
+  warnings: WarningCode[],
+): { verdict: Verdict; law: RateLaw | null; weights: PooledVerdict['weights'] } {
+  const forced = sharedRequest(wells.map((well) => well.series.law));
+  if (forced === 'mixed') warnings.push('mixed-forced-laws');
+  if (wells.every((well) => well.analysis.verdict === 'unusable')) {
+    warnings.push('too-few-readings');
+    return { verdict: 'unusable', law: null, weights: {} };
+  }
+  if (pooled.length === 0) {
+    warnings.push('no-reacting-wells');
+    return { verdict: 'no-reaction', law: null, weights: {} };
+  }
+  if (pooled.length < 2) warnings.push('few-wells');
+  const joint = poolEvidence(pooled);
+  if (forced === null || forced === 'mixed') {
+    warnings.push(...joint.warnings);
+    const law = joint.order === null ? null : rateLawOf(joint.verdict as RateLawName, joint.order);
+    return { verdict: joint.verdict, law, weights: joint.weights };
+  }
+  const order = pooled[0]!.analysis.order;
+  const law = rateLawOf(pooled[0]!.analysis.shownLaw!, order);
+  return { verdict: 'forced', law, weights: joint.weights };
+}
+
+/** The law that every well forces; null when none does, `mixed` when they disagree. */
+function sharedRequest(requests: readonly LawRequest[]): LawRequest | null | 'mixed' {
+  const keys = new Set(requests.map((request) => JSON.stringify(request)));
+  if (keys.size > 1) return 'mixed';
+  return requests[0] === undefined || requests[0] === 'auto' ? null : requests[0];
+}
+
+function blanksReact(blanks: readonly AnalysedWell[], wells: readonly PooledWell[]): boolean {
+  return blanks.some(
+    ({ analysis }) =>
+      analysis.verdict !== 'no-reaction' &&
+      analysis.verdict !== 'unusable' &&
+      wells.some((well) => Math.abs(well.series.temperatureK - analysis.temperatureK) <= 5),
+  );
+}
+
+/** Per kilogram of catalyst: mol L⁻¹ s⁻¹ over g/L is mol g⁻¹ s⁻¹. */
+function perMass(rate: CatalystAnalysis['rateRef'], loadingGPerL: number | null) {
+  return loadingGPerL === null ? null : scaled(rate, 1000 / loadingGPerL);
+}
+
+/** Per active site, as a rate of reaction: the coefficient of the reactant divides. */
+function perSite(rate: CatalystAnalysis['rateRef'], wells: readonly PooledWell[]) {
+  const series = wells.find((well) => well.series.siteDensityMolPerKg !== null)?.series;
+  if (series === undefined || !(series.siteDensityMolPerKg! > 0)) return null;
+  return scaled(rate, 1 / (series.siteDensityMolPerKg! * series.nu));
+}
+
+function scaled(rate: CatalystAnalysis['rateRef'], factor: number): CatalystAnalysis['rateRef'] {
+  if (rate === null) return null;
+  const times = (value: number | null) => (value === null ? null : value * factor);
+  return {
+    value: rate.value * factor,
+    se: times(rate.se),
+    low: times(rate.low),
+    high: times(rate.high),
+  };
+}
+
+function largest(values: readonly (number | null)[]): number | null {
+  const known = values.filter((value) => value !== null);
+  return known.length > 0 ? Math.max(...known) : null;
+}
+
+function relativeResidualSd(fits: readonly LawFit[]): number | null {
+  let [squares, dof] = [0, 0];
+  for (const fit of fits) {
+    if (fit.c0 === null || !(fit.c0 > 0) || fit.dof < 1) continue;
+    squares += fit.rss / fit.c0 ** 2;
+    dof += fit.dof;
+  }
+  return dof > 0 && Number.isFinite(squares) ? Math.sqrt(squares / dof) : null;
+}

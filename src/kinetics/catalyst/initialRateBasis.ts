@@ -1,0 +1,73 @@
+import { rateLaws } from '../rateLaws/registry';
+import type { ReadingDimension, ReferenceConditions } from '../types';
+import type { BasisResult, PooledWell } from './pooledWell';
+import { activationEnergyOf } from './fitArrhenius';
+import { constantPoint, referenceConcentration } from './lawBasis';
+import {
+  bracketOf,
+  constantsOverTemperature,
+  scaledConstant,
+  timeFromConstant,
+  type ConstantPoint,
+} from './rateAtReference';
+
+/**
+ * Results of a catalyst whose order the wells do not tell: the activation energy of its initial
+ * rates, and brackets between orders 0 and 2, r(C_ref) = r0 (C_ref/C0)ⁿ. The middle of a bracket is
+ * its first-order value; its ends include the intervals of the initial rates.
+ */
+export function describeByInitialRate(
+  wells: readonly PooledWell[],
+  dimension: ReadingDimension,
+  reference: ReferenceConditions,
+): BasisResult {
+  // Signals differ in scale from well to well: only rates relative to C0 compare.
+  const relative = wells.some((well) => well.series.kind === 'signal');
+  const line = constantsOverTemperature(pseudoConstants(wells, relative ? 1 : 0), null).line;
+  const c = referenceConcentration(reference, dimension);
+  const x = reference.targetConversion;
+
+  const byOrder = rateLaws.map((law) => ({
+    law,
+    at:
+      reference.temperatureK === null || c === null
+        ? null
+        : constantsOverTemperature(pseudoConstants(wells, law.order), reference.temperatureK).at,
+  }));
+  const rates = byOrder.map(({ law, at }) => scaledConstant(at, law.order * Math.log(c ?? NaN)));
+  const times = byOrder.map(({ law, at }) =>
+    timeFromConstant(
+      at,
+      x === null ? NaN : Math.log(law.reach(x)) - (law.order - 1) * Math.log(c ?? NaN),
+    ),
+  );
+  const middle = byOrder.findIndex(({ law }) => law.order === 1);
+  const rateRef = bracketOf(rates[middle] ?? null, rates);
+  const timeToTarget = bracketOf(times[middle] ?? null, times);
+  return {
+    kUnit: null,
+    kRef: null,
+    kRefTemperatureK: null,
+    rateRef,
+    timeToTarget,
+    bracket: rateRef !== null || timeToTarget !== null,
+    arrhenius: line,
+    activationEnergy: null,
+    initialRateActivationEnergy: line === null ? null : activationEnergyOf(line),
+    lnA: null,
+  };
+}
+
+/** r0/Cⁿ of each well at its first reading: its k if the order were n. */
+function pseudoConstants(wells: readonly PooledWell[], order: number): ConstantPoint[] {
+  return wells.flatMap((well) => {
+    const rate = well.analysis.initialRate;
+    const c = well.firstConcentration;
+    if (rate === null || (order !== 0 && !(c !== null && c > 0))) return [];
+    const scale = order === 0 ? 1 : (c ?? 1) ** order;
+    const dof = Math.max(well.analysis.pointsUsed - 2, 1);
+    const se = rate.se === null ? null : rate.se / scale;
+    const point = constantPoint(well, rate.value / scale, se, dof);
+    return point === null ? [] : [point];
+  });
+}

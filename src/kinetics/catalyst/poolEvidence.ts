@@ -1,0 +1,115 @@
+import type { AnalysedWell } from '../analyseWell';
+import { akaikeWeights } from '../statistics/goodnessOfFit';
+import type { RateLawName, WarningCode } from '../types';
+import { selectRateLaw, type Evidence, type FreeOrder } from '../verdict/selectRateLaw';
+import { aboutMean, betweenVariance, weightedMean } from './betweenVariance';
+import { setTemperatures } from './temperatures';
+
+/** What a catalyst's wells say together. */
+export interface PooledVerdict {
+  verdict: 'zero' | 'first' | 'second' | 'other' | 'undetermined';
+  order: number | null;
+  weights: Partial<Record<RateLawName, number>>;
+  warnings: WarningCode[];
+}
+
+/** Wells that miss the shared law, beyond which the law is not asserted. */
+const WELLS_MISSING = 2;
+const SHARE_MISSING = 0.1;
+
+type JudgedWell = AnalysedWell & { evidence: Evidence };
+
+/** Sum of the wells' AICc: each well has its own k, C0 and noise, all share the law. */
+function sumEvidence(wells: readonly JudgedWell[]): Evidence {
+  const laws = wells[0]!.evidence.laws.map((law, i) => ({
+    ...law,
+    aicc: wells.reduce((sum, well) => sum + well.evidence.laws[i]!.aicc, 0),
+  }));
+  const best = laws.reduce((lowest, law) => (law.aicc < lowest.aicc ? law : lowest));
+  const rivals: Evidence['rivals'] = {};
+  for (const name of ['order', 'plateau', 'deactivating'] as const) {
+    const own = wells.filter((well) => well.evidence.rivals[name] !== undefined);
+    if (own.length === 0) continue;
+    // Wells too small for the rival stand with the best law, so that the sums stay comparable.
+    rivals[name] = own.reduce((sum, well) => {
+      const law = well.evidence.laws.find((one) => one.name === best.name)!;
+      return sum + well.evidence.rivals[name]! - law.aicc;
+    }, best.aicc);
+  }
+  return { laws, rivals };
+}
+
+/** Free order over the wells, with the scatter between wells as a random effect. */
+function poolOrder(wells: readonly JudgedWell[]): FreeOrder | null {
+  const free = wells
+    .map((well) => well.freeOrder)
+    .filter((order): order is FreeOrder & { orderSe: number } => order?.orderSe != null);
+  if (free.length === 0) return null;
+  if (free.length === 1) return free[0]!;
+  const orders = free.map((order) => order.order);
+  const variances = free.map((order) => Math.max(order.orderSe, 1e-9) ** 2);
+  const tau2 = betweenVariance((w) => aboutMean(orders, w), variances, orders.length - 1);
+  const weights = variances.map((variance) => 1 / (variance + tau2));
+  const dof = free.reduce((sum, order) => sum + order.dof, 0);
+  return {
+    order: weightedMean(orders, weights),
+    orderSe: Math.sqrt(1 / weights.reduce((sum, w) => sum + w, 0)),
+    dof: tau2 > 0 ? orders.length - 1 : dof,
+  };
+}
+
+/**
+ * Lets a catalyst's wells decide its law together: one law for all, k, C0 and noise per well, the
+ * evidence of the wells added up; the same guards as for one well, on the pooled free order; and
+ * at least two wells that agree where there are two. Temperatures that each assert another order
+ * give `other` with a warning.
+ *
+ * @param wells the reacting wells
+ */
+export function poolEvidence(wells: readonly AnalysedWell[]): PooledVerdict {
+  const judged = wells.filter((well): well is JudgedWell => well.evidence !== null);
+  if (judged.length === 0) {
+    return { verdict: 'undetermined', order: null, weights: {}, warnings: ['too-few-for-order'] };
+  }
+  const evidence = sumEvidence(judged);
+  const shares = akaikeWeights(evidence.laws.map((law) => law.aicc));
+  const weights: PooledVerdict['weights'] = {};
+  evidence.laws.forEach((law, i) => (weights[law.name] = shares[i]!));
+  const refuse = (
+    verdict: 'other' | 'undetermined',
+    ...warnings: WarningCode[]
+  ): PooledVerdict => ({ verdict, order: null, weights, warnings });
+
+  if (ordersByTemperature(judged).size > 1)
+    return refuse('other', 'order-changes-with-temperature');
+  const selection = selectRateLaw(evidence, poolOrder(judged));
+  if (selection.order === null) {
+    return refuse(selection.verdict as 'other' | 'undetermined', ...selection.warnings);
+  }
+  const agreeing = judged.filter((well) => {
+    const laws = well.evidence.laws;
+    const own = laws.find((law) => law.name === selection.best)!;
+    return laws.every((law) => own.aicc <= law.aicc);
+  }).length;
+  if (agreeing < Math.min(2, judged.length)) return refuse('undetermined', 'laws-equally-good');
+  const missing = judged.filter((well) => well.analysis.lackOfFit?.significant === true).length;
+  if (
+    missing >= Math.min(WELLS_MISSING, judged.length) &&
+    missing > SHARE_MISSING * judged.length
+  ) {
+    return refuse('other', 'no-simple-order', 'lack-of-fit');
+  }
+  return { verdict: selection.verdict, order: selection.order, weights, warnings: [] };
+}
+
+/** The orders that the wells of single temperatures assert. */
+function ordersByTemperature(wells: readonly JudgedWell[]): Set<number> {
+  const sets = setTemperatures(wells.map((well) => well.series.temperatureK));
+  const orders = new Set<number>();
+  for (const set of new Set(sets)) {
+    const own = wells.filter((_, i) => sets[i] === set);
+    const { order } = selectRateLaw(sumEvidence(own), poolOrder(own));
+    if (order !== null) orders.add(order);
+  }
+  return orders;
+}

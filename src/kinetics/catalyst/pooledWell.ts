@@ -1,0 +1,29 @@
+import type { AnalysedWell } from '../analyseWell';
+import type { RateLaw } from '../rateLaws/rateLaw';
+import type { CatalystAnalysis, LawFit } from '../types';
+
+/** The result keys that a basis fills in. */
+export type BasisResult = Pick<
+  CatalystAnalysis,
+  | 'kUnit'
+  | 'kRef'
+  | 'kRefTemperatureK'
+  | 'rateRef'
+  | 'timeToTarget'
+  | 'bracket'
+  | 'arrhenius'
+  | 'activationEnergy'
+  | 'initialRateActivationEnergy'
+  | 'lnA'
+>;
+
+/** A reacting well with the factor that brings its k to the pooled loading. */
+export interface PooledWell extends AnalysedWell {
+  factor: number;
+}
+
+/** The fit of a well under a law, or under its shown law. */
+export function fitUnder(well: AnalysedWell, law: RateLaw | null): LawFit | null {
+  const name = law?.name ?? well.analysis.shownLaw;
+  return name === null ? null : (well.analysis.fits[name] ?? null);
+}

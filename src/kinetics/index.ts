@@ -1,0 +1,18 @@
+export { analyseScreen } from './analyseScreen';
+export { analyseSeries } from './analyseSeries';
+export { analyseWell, type AnalysedWell } from './analyseWell';
+export { analyseCatalyst } from './catalyst/analyseCatalyst';
+export { ENGINE_VERSION, GAS_CONSTANT } from './constants';
+export {
+  evaluateArrhenius,
+  evaluateFit,
+  reactantConcentrations,
+  straighten,
+  type BandedCurve,
+  type StraightenedReading,
+} from './curves';
+export { explainCatalyst, explainSeries, explainWarning } from './explanations';
+export { baseUnit, rateConstantUnit, rateUnit } from './rateLaws/rateConstantUnit';
+export { findRateLaw, lawOfOrder, rateLaws } from './rateLaws/registry';
+export { formatWithUncertainty, superscript, type FormattedValue } from './significantFigures';
+export type * from './types';
