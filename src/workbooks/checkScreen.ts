@@ -50,7 +50,7 @@ function checkPairs(rows: ScreenRows, { issues }: ReadingContext): void {
       cell: `${readings.column}${readings.rows[0]}`,
       found: readings.position,
       expected: 'a well that the layout describes',
-      message: `Well ${readings.position} of ${readings.plate} has ${readings.rows.length} readings, from row ${readings.rows[0]} on, but “${rows.wellSheet}” does not describe it. Add it there, or correct the well or plate.`,
+      message: `Well ${readings.position} of ${readings.plate} has ${counted(readings.rows.length, 'reading')}, from row ${readings.rows[0]} on, but “${rows.wellSheet}” does not describe it. Add it there, or correct the well or plate.`,
     });
   }
 }
