@@ -1,0 +1,77 @@
+import type { CandidateView } from '../../contracts/candidate';
+import { candidateHref } from '../../contracts/links';
+import { formatDay } from '../dates';
+import { FigureText } from './FigureText';
+import { cardFacts, headerFigures } from './headerFigures';
+import { VerdictMark } from './VerdictMark';
+
+/** Who the candidate is, what was found, and the numbers that it is judged by. */
+export function CandidateHeader({ view }: { view: CandidateView }) {
+  const { catalyst, campaign, result, analysis, screen } = view;
+  const linkTo = (id: string) => candidateHref(campaign.groupId, campaign.id, id);
+  return (
+    <header>
+      <div className="flex flex-wrap items-baseline justify-between gap-x-6">
+        <h1 className="display">
+          {catalyst.code}
+          {catalyst.composition && (
+            <span className="text-quiet ml-3 text-[18px] font-normal">
+              {catalyst.composition}
+              {catalyst.support && ` on ${catalyst.support}`}
+            </span>
+          )}
+        </h1>
+        <nav aria-label="Candidates beside this one" className="flex gap-4 print:hidden">
+          {view.previous && <a href={linkTo(view.previous.id)}>← {view.previous.code}</a>}
+          {view.next && <a href={linkTo(view.next.id)}>{view.next.code} →</a>}
+        </nav>
+      </div>
+
+      <div className="mt-4 flex items-start gap-4">
+        <VerdictMark verdict={result.verdict} order={result.order} large />
+        <p className="max-w-[68ch]">{view.explanation}</p>
+      </div>
+
+      <dl className="mt-6 grid grid-cols-1 gap-x-8 gap-y-4 sm:grid-cols-2 xl:grid-cols-3">
+        {headerFigures(view).map(({ name, at, figure, note }) => (
+          <div key={name} className="border-rule border-t pt-2">
+            <dt className="text-quiet text-[13px] leading-5">
+              {name}
+              {at && <span className="block">{at}</span>}
+            </dt>
+            <dd className="m-0">
+              {figure ? <FigureText figure={figure} /> : <span className="text-quiet">–</span>}
+              {note && <span className="text-quiet block text-[13px] leading-5">{note}</span>}
+            </dd>
+          </div>
+        ))}
+      </dl>
+
+      {view.warnings.length > 0 && (
+        <ul
+          aria-label="Warnings"
+          className="border-warning mt-6 list-none space-y-1 border-l-2 p-0 pl-4"
+        >
+          {view.warnings.map(({ code, sentence }) => (
+            <li key={`${code}-${sentence}`} className="max-w-[72ch]">
+              {sentence}
+            </li>
+          ))}
+        </ul>
+      )}
+
+      <p className="text-quiet mt-4 text-[13px] leading-5">
+        {cardFacts(view).map(([name, value], index) => (
+          <span key={name}>
+            {index > 0 && ' · '}
+            {name} <span className="text-ink">{value}</span>
+          </span>
+        ))}
+      </p>
+      <p className="text-quiet text-[13px] leading-5">
+        From the analysis of {screen.name} that {analysis.requestedBy} made on{' '}
+        {formatDay(analysis.finishedAt)}, engine {analysis.engine}.
+      </p>
+    </header>
+  );
+}

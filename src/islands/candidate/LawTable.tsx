@@ -1,0 +1,89 @@
+import type { SeriesAnalysis } from '../../kinetics/types';
+import { readingUnitFor } from '../charts/displayUnits';
+import { plotNumber } from '../charts/plotNumber';
+import { figureOf, percent } from './figures';
+import { lawRows, type LawRow } from './lawEvidence';
+import { VerdictMark } from './VerdictMark';
+
+const numeric = 'py-1.5 pr-4 text-right whitespace-nowrap tabular-nums';
+
+/** The rival laws on one well, with what speaks for and against each. */
+export function LawTable({ analysis }: { analysis: SeriesAnalysis }) {
+  const rows = lawRows(analysis);
+  if (rows.length === 0) return <p className="text-quiet">No law could be fitted to this well.</p>;
+  const c0 = readingUnitFor(
+    analysis.dimension,
+    Math.max(...rows.map(({ fit }) => Math.abs(fit.c0 ?? 0))),
+  );
+  const sd = readingUnitFor(
+    analysis.dimension,
+    Math.max(...rows.map(({ fit }) => fit.residualSd ?? 0)),
+  );
+  const inUnit = (name: string, unit: string) => (unit === '' ? name : `${name}, ${unit}`);
+  return (
+    <div className="overflow-x-auto">
+      <table className="w-full border-collapse text-[13.5px] leading-5">
+        <caption className="sr-only">Rate laws fitted to this well</caption>
+        <thead>
+          <tr className="text-quiet border-rule border-b text-left align-bottom text-[13px]">
+            <th scope="col" className="py-1.5 pr-4 font-normal">
+              Law
+            </th>
+            <th scope="col" className={`${numeric} font-normal`}>
+              k ± s.e.
+            </th>
+            <th scope="col" className={`${numeric} font-normal`}>
+              {inUnit('C₀', c0.unit)}
+            </th>
+            <th scope="col" className={`${numeric} font-normal`}>
+              {inUnit('Residual s.d.', sd.unit)}
+            </th>
+            <th scope="col" className={`${numeric} font-normal`}>
+              ΔAICc
+            </th>
+            <th scope="col" className={`${numeric} font-normal`}>
+              Weight
+            </th>
+            <th scope="col" className="py-1.5 pl-2 font-normal">
+              For and against
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((row) => (
+            <LawLine key={row.law} row={row} c0Factor={c0.factor} sdFactor={sd.factor} />
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+function LawLine({ row, c0Factor, sdFactor }: { row: LawRow; c0Factor: number; sdFactor: number }) {
+  const { fit } = row;
+  const k =
+    fit.k === null
+      ? null
+      : figureOf({ value: fit.k, se: fit.kSe, low: null, high: null }, row.kUnit ?? '');
+  return (
+    <tr className={`border-rule border-b align-top ${row.shown ? '' : 'text-quiet'}`}>
+      <th scope="row" className="py-1.5 pr-4 text-left font-semibold whitespace-nowrap">
+        <VerdictMark
+          verdict={row.law === 'order' ? 'other' : row.law}
+          order={null}
+          word={row.name}
+        />
+      </th>
+      <td className={numeric}>{k ? `${k.text} ${k.unit}` : '–'}</td>
+      <td className={numeric}>{fit.c0 === null ? '–' : plotNumber(fit.c0 * c0Factor)}</td>
+      <td className={numeric}>
+        {fit.residualSd === null ? '–' : plotNumber(fit.residualSd * sdFactor, 2)}
+      </td>
+      <td className={numeric}>{row.deltaAicc === null ? '–' : row.deltaAicc.toFixed(1)}</td>
+      <td className={numeric}>
+        {fit.weight === null ? '–' : fit.weight < 0.001 ? '< 0.1 %' : percent(fit.weight)}
+      </td>
+      <td className="min-w-56 py-1.5 pl-2">{row.words}</td>
+    </tr>
+  );
+}

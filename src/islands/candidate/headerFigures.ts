@@ -1,0 +1,87 @@
+import type { CandidateView } from '../../contracts/candidate';
+import { rateUnit } from '../../kinetics/rateLaws/rateConstantUnit';
+import { celsius } from '../charts/buildArrheniusOption';
+import { readingUnitFor } from '../charts/displayUnits';
+import { plotNumber } from '../charts/plotNumber';
+import { durationFigure, figureOf, type Figure } from './figures';
+
+/** One measured quantity of the header. */
+export interface HeaderFigure {
+  name: string;
+  /** At which conditions it holds; empty where that goes without saying. */
+  at: string;
+  figure: Figure | null;
+  /** What stands in its place, or beside it: a bracket, a reason why there is none. */
+  note: string | null;
+}
+
+/** The numbers that a candidate is judged by, with their conditions. */
+export function headerFigures({ result, campaign }: CandidateView): HeaderFigure[] {
+  const { dimension } = result;
+  const concentration = readingUnitFor(dimension, campaign.referenceConcentration);
+  const c = `${plotNumber(campaign.referenceConcentration * concentration.factor)} ${concentration.unit}`;
+  const conditions =
+    `${celsius(campaign.referenceTemperatureK)}, ${c}, ` +
+    `${plotNumber(campaign.referenceLoadingGPerL)} g/L`;
+  const bracket = result.bracket ? 'a bracket between zero and second order' : null;
+  const ofInitialRates = result.activationEnergy === null && result.initialRateActivationEnergy;
+  const energy = result.activationEnergy ?? result.initialRateActivationEnergy;
+  const rates = [
+    {
+      name: 'Rate',
+      at: conditions,
+      figure: result.rateRef && figureOf(result.rateRef, rateUnit(dimension)),
+      note: result.rateRef ? bracket : 'cannot be given at these conditions',
+    },
+    {
+      name: 'Rate per mass of catalyst',
+      at: 'at the same conditions',
+      figure: result.rateRefPerMass && figureOf(result.rateRefPerMass, 'mol kg^-1 s^-1'),
+      note: result.rateRefPerMass ? bracket : 'no reference loading',
+    },
+    {
+      name: 'Turnover frequency',
+      at: 'per site',
+      figure: result.turnoverFrequency && figureOf(result.turnoverFrequency, 's^-1'),
+      note: result.turnoverFrequency ? null : 'the card has no site density',
+    },
+  ];
+  return [
+    {
+      name: 'Apparent activation energy',
+      at: ofInitialRates ? 'of initial rates' : '',
+      figure: energy && figureOf(energy, 'kJ/mol', 1e-3),
+      note: energy ? null : 'needs one law at more than one temperature',
+    },
+    {
+      name: 'Rate constant k',
+      at: result.kRefTemperatureK === null ? '' : celsius(result.kRefTemperatureK),
+      figure: result.kRef && figureOf(result.kRef, result.kUnit ?? ''),
+      note: result.kRef ? null : 'no order, so no k; rates below stand without one',
+    },
+    ...rates.slice(0, 1),
+    {
+      name: `Time to ${Math.round(campaign.targetConversion * 1000) / 10} % conversion`,
+      at: `from ${c}`,
+      figure: result.timeToTarget && durationFigure(result.timeToTarget),
+      note: result.timeToTarget ? bracket : 'cannot be given at these conditions',
+    },
+    ...(dimension === 'concentration' ? rates.slice(1) : []),
+  ];
+}
+
+/** The catalyst's card as facts worth a line; what is unknown is left out. */
+export function cardFacts({ catalyst }: CandidateView): [name: string, value: string][] {
+  const number = (value: number | null, unit: string) =>
+    value === null ? null : `${plotNumber(value)} ${unit}`;
+  const facts: [string, string | null][] = [
+    ['Support', catalyst.support],
+    ['Metal loading', number(catalyst.metalLoadingPercent, '%')],
+    ['Lot', catalyst.lot],
+    ['Active sites', number(catalyst.siteDensityMolPerKg, 'mol/kg')],
+    ['Surface area', number(catalyst.surfaceAreaM2PerG, 'm²/g')],
+    ['Particle size', number(catalyst.particleSizeUm, 'µm')],
+    ['Hazards', catalyst.hazards],
+  ];
+  return facts.flatMap(([name, value]) => (value ? [[name, value] as [string, string]] : []));
+}
