@@ -1,25 +1,31 @@
-import { useCallback, useEffect, useState } from 'react';
+import { useCallback, useSyncExternalStore } from 'react';
 import type { CandidateWell } from '../../contracts/candidate';
 import { wellInAddress, withWell } from './wellAddress';
 import { firstWell } from './wellGroups';
 
+const listeners = new Set<() => void>();
+
+function subscribe(listener: () => void) {
+  listeners.add(listener);
+  addEventListener('popstate', listener);
+  return () => {
+    listeners.delete(listener);
+    removeEventListener('popstate', listener);
+  };
+}
+
+const fromAddress = () => wellInAddress(location.search);
+
 /** The well that is open, kept in the address so that it can be sent to a colleague. */
 export function useChosenWell(wells: readonly CandidateWell[], askedFor: string | null) {
-  const [chosen, setChosen] = useState(() => firstWell(wells, askedFor));
-  useEffect(() => {
-    const follow = () => setChosen(firstWell(wells, wellInAddress(location.search)));
-    follow();
-    addEventListener('popstate', follow);
-    return () => removeEventListener('popstate', follow);
-  }, [wells]);
+  const wellId = useSyncExternalStore(subscribe, fromAddress, () => askedFor);
   const choose = useCallback(
-    (wellId: string) => {
-      const well = wells.find((one) => one.wellId === wellId);
-      if (!well) return;
-      setChosen(well);
-      history.replaceState(history.state, '', withWell(location.search, wellId) + location.hash);
+    (next: string) => {
+      if (!wells.some((well) => well.wellId === next)) return;
+      history.replaceState(history.state, '', withWell(location.search, next) + location.hash);
+      for (const listener of listeners) listener();
     },
     [wells],
   );
-  return { chosen, choose };
+  return { chosen: firstWell(wells, wellId), choose };
 }
