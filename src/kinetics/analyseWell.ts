@@ -148,7 +148,7 @@ function describeDeadWell(
     fits: fits.byName,
     shownLaw: 'zero',
     residualSd: zero.fit.residualSd,
-    lackOfFit: testLackOfFit(zero.relative.residuals),
+    lackOfFit: testLackOfFit(zero.relative.residuals, zero.relative.problem.valueScale),
     outliers: findOutliers(zero.relative, readings.indices),
     warnings: [...blank.warnings],
   };
@@ -172,7 +172,7 @@ function describeReactingWell(
   shown: FittedLaw,
 ): SeriesAnalysis {
   const isForced = series.law !== 'auto';
-  const lackOfFit = testLackOfFit(shown.relative.residuals);
+  const lackOfFit = testLackOfFit(shown.relative.residuals, shown.relative.problem.valueScale);
   const misses = !isForced && selection.order !== null && lackOfFit.significant;
   const isAsserted = isForced || (selection.order !== null && !misses);
   const { fit, law, initialRate } = shown;

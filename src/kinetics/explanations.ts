@@ -141,14 +141,14 @@ export function explainSeries(analysis: SeriesAnalysis): string {
 
 /** The verdict on a catalyst as a sentence for a chemist. */
 export function explainCatalyst(result: CatalystAnalysis): string {
-  const wells = result.wells === 1 ? 'its one well' : `its ${result.wells} wells`;
+  const wells = result.wells === 1 ? 'its one well' : `its ${result.wells} wells together`;
   switch (result.verdict) {
     case 'zero':
     case 'first':
     case 'second':
-      return `${nameOfOrder(result.order)}, decided by ${wells} together at ${result.temperatures} temperature${result.temperatures === 1 ? '' : 's'}.`;
+      return `${nameOfOrder(result.order)}, decided by ${wells} at ${result.temperatures} temperature${result.temperatures === 1 ? '' : 's'}.`;
     case 'saturating':
-      return `Saturating, decided by ${wells} together.`;
+      return `Saturating, decided by ${wells}.`;
     case 'forced':
       return `${nameOfOrder(result.order)} by choice: the law was set by hand, not found.`;
     case 'other':

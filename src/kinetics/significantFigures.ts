@@ -42,10 +42,10 @@ export function formatWithUncertainty(value: number, se: number | null): Formatt
   if (!Number.isFinite(value)) throw new RangeError(`value must be finite, got ${value}`);
   const error = se !== null && Number.isFinite(se) && se > 0 ? se : null;
   const lastPlace = error === null ? magnitude(value) - (PLAIN_FIGURES - 1) : lastPlaceOf(error);
-  // An error larger than the value still needs the power of ten to fit both.
+  // Where the error is larger than the value, its power of ten serves both.
   const top = Math.max(
     magnitude(roundAt(value, lastPlace)),
-    error === null ? -Infinity : lastPlace,
+    error === null ? -Infinity : magnitude(roundAt(error, lastPlace)),
   );
   const exponent = top < LOWEST_PLAIN || top >= HIGHEST_PLAIN ? top : 0;
   const decimals = Math.min(Math.max(exponent - lastPlace, 0), 20);
