@@ -19,6 +19,20 @@ const SHARE_MISSING = 0.1;
 
 type JudgedWell = AnalysedWell & { evidence: Evidence };
 
+/** Mean and variance of what one needless parameter gains in −2 ln L: χ² with one degree. */
+const FREE = { mean: 1, variance: 2 };
+/** The same for a parameter that must not be negative: half of the time nothing. */
+const ONE_SIDED = { mean: 0.5, variance: 1.25 };
+
+/**
+ * Charge for a rival whose extra parameter the wells would share although each well fits its own:
+ * the parameter itself, what fitting it per well gains by chance, and twice the spread of that.
+ * AICc well by well would charge so much that departures seen in every well went unnoticed.
+ */
+function sharedCharge(gain: typeof FREE, wells: number): number {
+  return 2 + gain.mean * wells + 2 * Math.sqrt(gain.variance * wells);
+}
+
 /** Sum of the wells' AICc: each well has its own k, C0 and noise, all share the law. */
 function sumEvidence(wells: readonly JudgedWell[]): Evidence {
   const laws = wells[0]!.evidence.laws.map((law, i) => ({
@@ -31,12 +45,17 @@ function sumEvidence(wells: readonly JudgedWell[]): Evidence {
     const own = wells.filter((well) => well.evidence.rivals[name] !== undefined);
     if (own.length === 0) continue;
     // Wells too small for the rival stand with the best law, so that the sums stay comparable.
-    rivals[name] = own.reduce((sum, well) => {
-      const law = well.evidence.laws.find((one) => one.name === best.name)!;
-      return sum + well.evidence.rivals[name]! - law.aicc;
-    }, best.aicc);
+    const gain = own.reduce((sum, { evidence }) => {
+      const law = evidence.laws.find((one) => one.name === best.name)!;
+      return sum + law.aicc - evidence.rivals[name]! + evidence.rivalCharge;
+    }, 0);
+    const charge = Math.min(
+      own.reduce((sum, { evidence }) => sum + evidence.rivalCharge, 0),
+      sharedCharge(name === 'order' ? FREE : ONE_SIDED, own.length),
+    );
+    rivals[name] = best.aicc - gain + charge;
   }
-  return { laws, rivals };
+  return { laws, rivals, rivalCharge: 0 };
 }
 
 /** Free order over the wells, with the scatter between wells as a random effect. */

@@ -9,6 +9,9 @@ export interface Departure {
   parameters: number;
 }
 
+/** Only the sum of squares is wanted of these curves, not their constants. */
+const SMALLEST_GAIN = 1e-6;
+
 /** A level that stays: y = a e^(−κt) + b, parameters (a, ln κ, b). */
 const plateau: CurveModel = (p, t, gradient) => {
   const kappa = Math.exp(p[1]!);
@@ -77,6 +80,7 @@ export function fitDepartures(first: RelativeFit): Departure[] {
       problem.y,
       start,
       keep,
+      SMALLEST_GAIN,
     );
     if (found.parameters[1]! > 0) rss = Math.min(rss, found.rss);
   }
@@ -86,7 +90,7 @@ export function fitDepartures(first: RelativeFit): Departure[] {
     rss = first.rss / unit;
     for (const faster of [1.3, 4]) {
       const start = [0.7 * amplitude, Math.log(kappa * faster), 0.3 * amplitude];
-      const found = fitCurve(plateau, problem.t, problem.y, start);
+      const found = fitCurve(plateau, problem.t, problem.y, start, keep, SMALLEST_GAIN);
       if (found.parameters[2]! > 0 && found.parameters[0]! > 0) rss = Math.min(rss, found.rss);
     }
     departures.push({ name: 'plateau', rss: rss * unit, parameters: 3 });

@@ -9,7 +9,8 @@ export interface LeastSquaresFit {
 }
 
 const MOST_ITERATIONS = 60;
-const SMALLEST_GAIN = 1e-13;
+/** Relative fall of the sum of squares below which the search stops, unless told otherwise. */
+const SMALLEST_GAIN = 1e-12;
 
 /**
  * Solves M x = b for a symmetric positive definite M by Cholesky's method; null where M is not.
@@ -58,6 +59,7 @@ export function invertPositive(matrix: readonly number[][]): number[][] | null {
  * three-parameter curves that have no closed profile.
  *
  * @param keep brings a trial point back into its allowed range, in place
+ * @param smallestGain relative fall of the sum of squares below which the search stops
  */
 export function fitCurve(
   model: CurveModel,
@@ -65,6 +67,7 @@ export function fitCurve(
   y: ArrayLike<number>,
   start: readonly number[],
   keep: (p: number[]) => void = () => undefined,
+  smallestGain = SMALLEST_GAIN,
 ): LeastSquaresFit {
   const size = start.length;
   const gradient = new Array<number>(size).fill(0);
@@ -109,7 +112,7 @@ export function fitCurve(
       }
       damping = improved ? Math.max(damping / 8, 1e-12) : damping * 6;
     }
-    if (!improved || gain < SMALLEST_GAIN) break;
+    if (!improved || gain < smallestGain) break;
   }
   return { parameters: p, rss, inverse: invertPositive(normal(p).matrix) };
 }

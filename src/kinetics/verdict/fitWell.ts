@@ -91,6 +91,8 @@ function gatherEvidence(
   };
   if (apparentOrder !== null) add('order', apparentOrder.rss, apparentOrder.parameters);
   const first = tried.find((fitted) => fitted.law.order === 1);
+  const laws = first?.relative.problem.mode === 'fraction' ? 1 : 2;
+  const unit = (first?.relative.problem.valueScale ?? 1) ** 2;
   if (first !== undefined) {
     for (const { name, rss, parameters } of fitDepartures(first.relative))
       add(name, rss, parameters);
@@ -102,5 +104,6 @@ function gatherEvidence(
       aicc: criterion,
     })),
     rivals,
+    rivalCharge: (criterionOf(unit, laws + 1) ?? 0) - (criterionOf(unit, laws) ?? 0),
   };
 }

@@ -15,6 +15,8 @@ export interface Evidence {
   laws: LawEvidence[];
   /** AICc of the curves with one more parameter, by name; absent where readings are too few. */
   rivals: Partial<Record<'order' | 'plateau' | 'deactivating', number>>;
+  /** What AICc charges a rival of this well for its extra parameter; 0 for pooled evidence. */
+  rivalCharge: number;
 }
 
 /** Free order with its standard error. */

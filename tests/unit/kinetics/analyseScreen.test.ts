@@ -176,6 +176,40 @@ describe('a catalyst that the wells do not decide', () => {
   });
 });
 
+describe('catalysts of no simple order', () => {
+  const shapes: [string, (u: number) => number][] = [
+    ['a level that stays', (u) => 0.3 + 0.7 * Math.exp(-1.6 * u)],
+    ['a catalyst that dies', (u) => Math.exp(-1.2 * (1 - Math.exp(-1.6 * u)))],
+  ];
+  it.each(shapes)('%s is not called an order over 8 wells at 2 %% noise', (_, shape) => {
+    let asserted = 0;
+    for (let run = 0; run < 20; run += 1) {
+      const normal = seededNormal(run + 1);
+      const series = wells({ order: 1 }, run).map((well) => {
+        const factor = Math.exp((-EA / GAS_CONSTANT) * (1 / well.temperatureK - 1 / T_REF));
+        const values = well.timesS.map(
+          (time) => 0.01 * (shape((factor * time) / 3600) + 0.02 * normal()),
+        );
+        return { ...well, values };
+      });
+      if (analyse(series).order !== null) asserted += 1;
+    }
+    expect(asserted).toBeLessThanOrEqual(4);
+  });
+
+  it('simple orders are rarely called something else', () => {
+    const verdicts = Array.from({ length: 30 }, (_, run) =>
+      analyse(wells({ order: run % 3, noise: 0.02 }, run + 1)),
+    );
+    const right = verdicts.filter((result, run) => result.order === run % 3).length;
+    const wrong = verdicts.filter(
+      (result, run) => result.order !== null && result.order !== run % 3,
+    );
+    expect(right).toBeGreaterThan(20);
+    expect(wrong).toHaveLength(0);
+  });
+});
+
 describe('warnings', () => {
   it('an order that changes with temperature is a finding', () => {
     const low = wells({ order: 0, temperaturesK: [323.15, T_REF], conversion: 0.9, energy: 0 });
