@@ -62,7 +62,7 @@ function ofOrder(order: number | null): string {
   return draw(order < 1.5 ? bending : trailing);
 }
 
-const zeroPath = `M${place(0, 1)}L${place(0.8, 0)}L${place(1, 0)}`;
+const zeroPath = `M${place(0, 1)}L${place(0.96, 0)}`;
 const solid = (...paths: string[]): MarkStroke[] => paths.map((path) => ({ path, dashed: false }));
 
 /**
@@ -82,7 +82,7 @@ export function decayMark(verdict: Verdict, order: number | null = null): MarkSt
     case 'saturating':
       return solid(draw(saturating));
     case 'other':
-      return solid(`M${place(0, 1)}L${place(0.34, 0.32)}L${place(0.52, 0.5)}L${place(1, 0.05)}`);
+      return solid(`M${place(0, 1)}L${place(0.28, 0.5)}L${place(0.64, 0.42)}L${place(1, 0)}`);
     case 'undetermined':
       return [draw(straight, 0, 0.8, 4), draw((x) => 1 - 0.55 * x), draw((x) => 1 - 0.18 * x)].map(
         (path) => ({ path, dashed: true }),
