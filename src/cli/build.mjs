@@ -1,7 +1,7 @@
 import { readdirSync, rmSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { pathToFileURL } from 'node:url';
-import { lastReason, run } from './processes.mjs';
+import { run } from './processes.mjs';
 import { root } from './settings.mjs';
 import { say, sayWhy, Stop } from './say.mjs';
 import { hashSources, isBuiltFrom, markBuilt } from './sources.mjs';
@@ -16,8 +16,6 @@ const options = {
   format: 'esm',
   target: 'node20',
   outExtension: { '.js': '.mjs' },
-  sourcemap: 'inline',
-  sourcesContent: false,
   logLevel: 'silent',
   absWorkingDir: root,
 };
@@ -55,7 +53,7 @@ export async function buildAll(folder, log) {
     env: { ...process.env, NODE_ENV: 'production', ASTRO_TELEMETRY_DISABLED: '1', NO_COLOR: '1' },
     log,
   });
-  if (code !== 0) throw new Stop(`The build failed: ${lastReason(output)}\n${tail(output)}`);
+  if (code !== 0) throw new Stop(`The build failed; its last words:\n${tail(output)}`);
   try {
     await Promise.all([buildWorkers(folder), buildServer(folder)]);
   } catch (error) {

@@ -16,7 +16,7 @@ export function packagesMatch(lock, installed) {
   return Object.entries(lock.packages).every(([path, wanted]) => {
     if (path === '' || wanted.link) return true;
     const found = installed.packages[path];
-    if (!found) return Boolean(wanted.optional || wanted.devOptional || wanted.peer);
+    if (!found) return Boolean(wanted.optional || wanted.devOptional);
     return found.version === wanted.version && found.integrity === wanted.integrity;
   });
 }
@@ -56,8 +56,9 @@ export async function ensurePackages(home) {
 
 /** npm keeps its cache in the home folder; where that cannot be written, in ours. */
 function npmEnvironment(home) {
-  // What `npm start` was called with is meant for it, not for the installation inside.
-  const { NODE_ENV: _production, ...env } = process.env;
+  // "production" would leave out what builds and checks.
+  const env = { ...process.env };
+  delete env.NODE_ENV;
   if (env.npm_config_cache && isWritable(env.npm_config_cache)) return env;
   return isWritable(homedir()) ? env : { ...env, npm_config_cache: join(home, 'npm-cache') };
 }
