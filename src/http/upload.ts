@@ -37,7 +37,7 @@ function readForm(request: Request): Promise<Form> {
         reject(problems.tooLarge('32 MB of workbook'));
       });
       stream.on('end', () => {
-        form.file = { name: info.filename, bytes: Buffer.concat(chunks) };
+        form.file = { name: info.filename ?? '', bytes: Buffer.concat(chunks) };
       });
     });
     parser.on('error', (error) => {
