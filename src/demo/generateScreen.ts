@@ -34,7 +34,7 @@ const BLOCK_SD_K = 0.25;
 /** Well-to-well spread of the rate, relative. */
 const WELL_SD = 0.025;
 /** s⁻¹ at the reference temperature. */
-const BLANK_RATE = 3e-7;
+const BLANK_RATE = 2e-8;
 
 const NO_CATALYST: CatalystTruth = {
   code: '',

@@ -1,7 +1,7 @@
 import { checkScreen } from './checkScreen';
 import { IssueList } from './issueList';
-import { LAYOUTS } from './layouts/registry';
-import type { Layout } from './layouts/layout';
+import { LAYOUTS } from './sheetLayouts/registry';
+import type { Layout } from './sheetLayouts/layout';
 import { DEFAULT_LIMITS, type WorkbookLimits } from './limits';
 import { readCsv } from './readCsv';
 import type { ReadingContext, ScreenRows, WellReadings, WellRow } from './reading';
@@ -198,15 +198,21 @@ function assemble(rows: ScreenRows, plates: ParsedPlate[], issues: IssueList): P
 }
 
 function asWell(rows: ScreenRows, well: WellRow, readings: WellReadings | undefined): ParsedWell {
-  const { plateFormat: _format, catalystCell: _cell, role, temperatureK, ...kept } = well;
-  if (role === null && well.catalyst === null) {
-    throw new Error(`Well ${well.position} has neither role nor catalyst and was not reported.`);
+  const { role, temperatureK } = well;
+  if (temperatureK === null || (role === null && well.catalyst === null)) {
+    throw new Error(`Well ${well.position} is not complete and was not reported.`);
   }
-  if (temperatureK === null) throw new Error(`Well ${well.position} has no temperature.`);
   return {
-    ...kept,
+    plate: well.plate,
+    position: well.position,
+    catalyst: well.catalyst,
     role: role ?? 'sample',
     temperatureK,
+    measuredTemperatureK: well.measuredTemperatureK,
+    massG: well.massG,
+    volumeL: well.volumeL,
+    replicate: well.replicate,
+    source: well.source,
     readings: {
       timesS: readings?.timesS ?? [],
       values: readings?.values ?? [],

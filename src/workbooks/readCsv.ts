@@ -6,6 +6,7 @@ import type { WorkbookLimits } from './limits';
 import { decimalEvidence } from './parseNumber';
 import { unguardedText } from './safeCell';
 import { EMPTY_CELL, textCell, type Sheet } from './sheet';
+import { findTable } from './table';
 
 /** The sheet name of every csv file. */
 export const CSV_SHEET = 'csv';
@@ -60,6 +61,8 @@ export function readCsv(bytes: Uint8Array, limits: WorkbookLimits, issues: Issue
       message: `A quotation mark is not closed properly${quotes.row === undefined ? '' : ` in row ${quotes.row + 1}`}. Correct it and upload the file again.`,
     });
   }
+  // Prose is no table with ragged rows; it is refused for having no header row.
+  if (!findTable(asSheet(rows, '.', limits))) return [asSheet(rows, '.', limits)];
   stopRagged(rows, issues);
   const decimalSign = findDecimalSign(rows, delimiter, issues);
   if (delimiter !== ',' || decimalSign === ',') {

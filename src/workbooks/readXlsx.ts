@@ -153,6 +153,10 @@ const ERROR_NAMES = new Map([
   [0x2a, '#N/A'],
 ]);
 
+const { is_date: isDateFormat } = XLSX.SSF as {
+  is_date: (format: string) => boolean;
+};
+
 function asCell(cell: XLSX.CellObject | null | undefined): Cell {
   if (!cell) return EMPTY_CELL;
   const formula = cell.f !== undefined;
@@ -161,7 +165,7 @@ function asCell(cell: XLSX.CellObject | null | undefined): Cell {
     case 'n': {
       const number = cell.v as number;
       const format = typeof cell.z === 'string' ? cell.z : '';
-      if (format !== '' && format !== 'General' && XLSX.SSF.is_date(format)) {
+      if (format !== '' && format !== 'General' && isDateFormat(format)) {
         return { ...plain, kind: 'date', text: `${number} (date)` };
       }
       const percent = /%/u.test(format.replace(/"[^"]*"/gu, ''));

@@ -21,11 +21,11 @@ export function writeWorkbook(sheets: readonly SheetToWrite[], writtenOn: Date):
   for (const { name, rows, widths } of sheets) {
     XLSX.utils.book_append_sheet(book, asWorksheet(rows, widths), name);
   }
-  const bytes: ArrayBuffer = XLSX.write(book, {
+  const bytes = XLSX.write(book, {
     type: 'array',
     bookType: 'xlsx',
     compression: true,
-  });
+  }) as ArrayBuffer;
   return new Uint8Array(bytes);
 }
 

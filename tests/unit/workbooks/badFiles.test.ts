@@ -2,6 +2,7 @@ import * as XLSX from 'xlsx';
 import { describe, expect, it } from 'vitest';
 import { DEFAULT_LIMITS } from '@/workbooks/limits';
 import {
+  CFB,
   goodRows,
   issuesOf,
   repacked,
@@ -16,9 +17,9 @@ const SHEET2 = 'xl/worksheets/sheet2.xml';
 
 /** An OLE container that holds the stream of an encrypted workbook. */
 function encryptedWorkbook(): Uint8Array {
-  const container = XLSX.CFB.utils.cfb_new();
-  XLSX.CFB.utils.cfb_add(container, '/EncryptedPackage', Buffer.from('secret'));
-  return new Uint8Array(XLSX.CFB.write(container, { type: 'buffer' }) as Buffer);
+  const container = CFB.utils.cfb_new();
+  CFB.utils.cfb_add(container, '/EncryptedPackage', Buffer.from('secret'));
+  return new Uint8Array(CFB.write(container, { type: 'buffer' }));
 }
 
 /** The good workbook with the encryption bit set in every zip header. */
