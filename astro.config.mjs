@@ -30,6 +30,8 @@ export default defineConfig({
   },
   vite: {
     plugins: [tailwindcss()],
+    // A font inside the style sheet would be a data: address, which the policy refuses.
+    build: { assetsInlineLimit: 0 },
     ssr: { noExternal: ['echarts-for-react', 'echarts', 'zrender'] },
   },
 });

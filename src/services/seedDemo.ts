@@ -69,7 +69,7 @@ async function placeCampaign(
     ...row,
     id,
     groupId,
-    conditions: `${conditions}. Benchmark ${benchmark}. ${thresholds}`,
+    conditions: `${conditions} Benchmark ${benchmark}. ${thresholds}`,
     createdAt: now,
   });
   await insertCatalysts(
