@@ -124,7 +124,8 @@ export async function viewScreen(
       plate: plateName,
       position: well.position,
       catalyst: catalystCode,
-      catalystId: well.catalystId,
+      // Bare supports have a card too, but no page: only these are candidates.
+      catalystId: well.role === 'sample' || well.role === 'benchmark' ? well.catalystId : null,
       role: well.role,
       temperatureK: well.measuredTemperatureK ?? well.temperatureK,
       readings: well.readingCount,
