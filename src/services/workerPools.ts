@@ -30,7 +30,7 @@ export interface WorkerPools {
   close(): Promise<void>;
 }
 
-const workbookSeconds = 30;
+const workbookSeconds = 60;
 const workbookMegabytes = 512;
 const waitingBatches = 32;
 
