@@ -2,6 +2,7 @@ import js from '@eslint/js';
 import astro from 'eslint-plugin-astro';
 import reactHooks from 'eslint-plugin-react-hooks';
 import globals from 'globals';
+import { defineConfig } from 'eslint/config';
 import tseslint from 'typescript-eslint';
 
 const folders = (names) => names.flatMap((name) => [`**/${name}/**`, `@/${name}/**`, `**/${name}`]);
@@ -32,7 +33,7 @@ const outer = [
 ];
 const impure = ['node:*', 'react', 'astro', 'astro:*', 'drizzle-orm', 'mysql2', 'mysql2/*'];
 
-export default tseslint.config(
+export default defineConfig(
   { ignores: ['dist/', '.astro/', '.data/', '.test/', 'coverage/', 'node_modules/', 'drizzle/'] },
   js.configs.recommended,
   ...tseslint.configs.recommendedTypeChecked,
@@ -55,9 +56,21 @@ export default tseslint.config(
         { considerDefaultExhaustiveForUnions: true },
       ],
       '@typescript-eslint/consistent-type-imports': 'error',
+      '@typescript-eslint/no-unused-vars': [
+        'error',
+        { argsIgnorePattern: '^_', varsIgnorePattern: '^_', ignoreRestSiblings: true },
+      ],
       'max-lines': ['warn', { max: 400, skipBlankLines: true, skipComments: true }],
       'astro/no-set-html-directive': 'error',
       'react-hooks/incompatible-library': 'off',
+    },
+  },
+  {
+    // A declaration that imports at its top is a module and declares nothing global.
+    files: ['src/env.d.ts'],
+    rules: {
+      '@typescript-eslint/triple-slash-reference': 'off',
+      '@typescript-eslint/consistent-type-imports': 'off',
     },
   },
   {

@@ -162,7 +162,8 @@ beforeAll(async () => {
   const stranger = demoAccount('Tarnside', 'admin');
   as.set('stranger', await signInAs(stranger.email, stranger.password));
 
-  const ask = async (path: string) => (await as.get('viewer')?.fetch(path))?.json();
+  const ask = async (path: string): Promise<unknown> =>
+    (await as.get('viewer')?.fetch(path))?.json();
   const { campaigns } = (await ask('/api/v1/campaigns')) as {
     campaigns: { id: string; groupId: string; name: string }[];
   };

@@ -34,7 +34,7 @@ const openScreens = async (page: Page) => {
   await page.getByRole('link', { name: 'Screens', exact: true }).click();
 };
 
-describe.sequential('the main path', () => {
+describe('the main path', () => {
   it('refuses a faulty workbook, names each cell, and stores nothing', async () => {
     await openScreens(analyst);
     await analyst.getByRole('link', { name: 'Upload workbook' }).first().click();
