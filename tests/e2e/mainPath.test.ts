@@ -29,6 +29,10 @@ beforeAll(async () => {
 }, 120_000);
 afterAll(() => browser?.close());
 
+/** A reason as it stands in the history, not in the box where it is written. */
+const inHistory = (page: Page, reason: string) =>
+  page.getByRole('listitem').filter({ hasText: reason }).waitFor(patience);
+
 const openScreens = async (page: Page) => {
   await page.getByRole('link', { name: 'Bromate hydrogenation in water' }).first().click();
   await page.getByRole('link', { name: 'Screens', exact: true }).click();
@@ -85,7 +89,7 @@ describe('the main path', () => {
     await analyst.getByRole('button', { name: 'Nominate' }).click();
     await analyst.getByRole('textbox', { name: /why/i }).fill('Fast, and clear of its neighbours');
     await analyst.getByRole('button', { name: 'Nominate' }).click();
-    await analyst.getByText('Fast, and clear of its neighbours').waitFor(patience);
+    await inHistory(analyst, 'Fast, and clear of its neighbours');
     expect(await analyst.getByRole('button', { name: 'Take to scale-up' }).count()).toBe(0);
 
     await lead.goto(analyst.url());
@@ -93,7 +97,7 @@ describe('the main path', () => {
     await lead.getByText(/calorimetry and hazard review/).waitFor(patience);
     await lead.getByRole('textbox', { name: /why/i }).fill('Agreed in the group meeting');
     await lead.getByRole('button', { name: 'Take to scale-up' }).click();
-    await lead.getByText('Agreed in the group meeting').waitFor(patience);
+    await inHistory(lead, 'Agreed in the group meeting');
     const history = await lead.locator('body').innerText();
     expect(history).toContain('Marlbeck analyst');
     expect(history).toContain('Marlbeck lead');
@@ -102,7 +106,7 @@ describe('the main path', () => {
   it('shows the decision to a viewer, who can change nothing', async () => {
     const viewer = await pageOf('viewer');
     await viewer.goto(lead.url());
-    await viewer.getByText('Agreed in the group meeting').waitFor(patience);
+    await inHistory(viewer, 'Agreed in the group meeting');
     for (const name of ['Nominate', 'Take to scale-up', 'Reopen', 'Add']) {
       expect(await viewer.getByRole('button', { name, exact: true }).count(), name).toBe(0);
     }
