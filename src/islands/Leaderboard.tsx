@@ -6,7 +6,8 @@ import { Button } from './Button';
 import { readingUnitFor } from './charts/displayUnits';
 import { plotNumber } from './charts/plotNumber';
 import { ErrorNote } from './ErrorNote';
-import { sortedBy } from './leaderboard/address';
+import { useAddressState } from './addressState';
+import { readLook, sortedBy, writeLook } from './leaderboard/address';
 import { announcement } from './leaderboard/announce';
 import { arrange } from './leaderboard/arrange';
 import { ColumnChoice } from './leaderboard/ColumnChoice';
@@ -16,7 +17,6 @@ import { buildForestSetting, ForestProvider } from './leaderboard/forestSetting'
 import { LeaderboardList } from './leaderboard/LeaderboardList';
 import { EmptyLeaderboard, PendingScreens } from './leaderboard/LeaderboardStates';
 import { LeaderboardTable } from './leaderboard/LeaderboardTable';
-import { useLook } from './leaderboard/useLook';
 import { useMedia, usePrinting } from './media';
 import { formatKelvinAsCelsius, formatPercent } from './numbers';
 
@@ -94,7 +94,7 @@ function Conditions({ leaderboard: { campaign } }: { leaderboard: LeaderboardVie
 
 function Candidates({ leaderboard, search }: { leaderboard: LeaderboardView; search: string }) {
   const { campaign, rows } = leaderboard;
-  const { look, change } = useLook(search);
+  const [look, change] = useAddressState(readLook, writeLook, search);
   const narrow = useMedia('(max-width: 767px)');
   const printing = usePrinting();
   const setting = useMemo(

@@ -1,6 +1,5 @@
-import { getCoreRowModel, useReactTable, type Table } from '@tanstack/react-table';
-import { useVirtualizer } from '@tanstack/react-virtual';
-import { memo, useRef } from 'react';
+import { getCoreRowModel, useReactTable } from '@tanstack/react-table';
+import { memo, useMemo } from 'react';
 import type { LeaderboardRow } from '../../contracts/leaderboard';
 import type { LeaderboardLook, SortId } from './address';
 import type { LeaderboardLine } from './arrange';
@@ -9,10 +8,9 @@ import { rowHeight } from './FigureCell';
 import { ForestAxisMarks } from './ForestPlot';
 import { useForest } from './forestSetting';
 import { ColumnHeader } from './ColumnHeader';
+import { Spacer } from '../Spacer';
+import { useVirtualLines } from '../virtualLines';
 import { RankMark, rankWidth } from './RankMark';
-
-/** Up to so many lines all are in the page, where the browser's search finds them. */
-const virtualFrom = 80;
 
 export interface LeaderboardTableProps {
   rows: LeaderboardRow[];
@@ -26,7 +24,15 @@ export interface LeaderboardTableProps {
 
 export function LeaderboardTable(props: LeaderboardTableProps) {
   const { rows, lines, columns, look, onSort, printing } = props;
-  const scroller = useRef<HTMLDivElement>(null);
+  const { scroller, first, last, before, after } = useVirtualLines(
+    lines.length,
+    rowHeight,
+    printing,
+  );
+  const columnVisibility = useMemo(
+    () => Object.fromEntries(look.hidden.map((id) => [id, false])),
+    [look.hidden],
+  );
   const table = useReactTable({
     data: rows,
     columns,
@@ -36,23 +42,16 @@ export function LeaderboardTable(props: LeaderboardTableProps) {
     manualSorting: true,
     manualFiltering: true,
     state: {
-      columnVisibility: Object.fromEntries(look.hidden.map((id) => [id, false])),
+      columnVisibility,
       sorting: [{ id: look.sort, desc: look.direction === 'desc' }],
     },
   });
-  const virtual = useVirtualizer({
-    count: lines.length,
-    getScrollElement: () => scroller.current,
-    estimateSize: () => rowHeight,
-    overscan: 12,
-    initialRect: { width: 1200, height: 900 },
-    enabled: lines.length > virtualFrom && !printing,
-  });
-  const all = lines.length <= virtualFrom || printing;
-  const shown = all ? [] : virtual.getVirtualItems();
-  const first = all ? 0 : (shown[0]?.index ?? 0);
-  const last = all ? lines.length - 1 : (shown.at(-1)?.index ?? -1);
-  const visible = visibleColumns(table);
+  // Rows that stay are not drawn anew while the table scrolls.
+  const leaves = table.getVisibleLeafColumns();
+  const visible = useMemo(
+    () => leaves.map(({ columnDef }) => columnDef as LeaderboardColumn),
+    [leaves],
+  );
   const width = visible.reduce((sum, one) => sum + (one.meta?.width ?? 0), rankWidth);
   return (
     <div
@@ -85,7 +84,7 @@ export function LeaderboardTable(props: LeaderboardTableProps) {
           </tr>
         </thead>
         <tbody>
-          <Spacer height={first * rowHeight} />
+          <Spacer height={before} />
           {lines.slice(first, last + 1).map((line, index) => (
             <Line
               key={line.kind === 'row' ? line.row.catalystId : `heading ${line.id}`}
@@ -94,23 +93,10 @@ export function LeaderboardTable(props: LeaderboardTableProps) {
               rowIndex={first + index + 2}
             />
           ))}
-          <Spacer height={(lines.length - 1 - last) * rowHeight} />
+          <Spacer height={after} />
         </tbody>
       </table>
     </div>
-  );
-}
-
-function visibleColumns(table: Table<LeaderboardRow>): LeaderboardColumn[] {
-  return table.getVisibleLeafColumns().map(({ columnDef }) => columnDef as LeaderboardColumn);
-}
-
-function Spacer({ height }: { height: number }) {
-  if (height <= 0) return null;
-  return (
-    <tr aria-hidden="true" className="spacer">
-      <td style={{ height }} />
-    </tr>
   );
 }
 

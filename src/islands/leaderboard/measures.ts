@@ -93,6 +93,21 @@ function prefixed(unit: string, toUnit: number, largest: number): MeasureUnit {
   return { unit: `${fits.prefix}${unit}`, factor: toUnit * fits.factor };
 }
 
+/** The unit of a rate whose largest figure is given in base units. */
+export function prefixedRateUnit(
+  dimension: CampaignSummary['dimension'],
+  largest: number,
+): MeasureUnit {
+  switch (dimension) {
+    case 'concentration':
+      return prefixed('mol L⁻¹ s⁻¹', 1, largest);
+    case 'pressure':
+      return largest >= 1e3 ? { unit: 'kPa s⁻¹', factor: 1e-3 } : { unit: 'Pa s⁻¹', factor: 1 };
+    case 'ratio':
+      return largest >= 0.1 ? { unit: 's⁻¹', factor: 1 } : { unit: 'h⁻¹', factor: 3600 };
+  }
+}
+
 function timeUnit(middle: number): MeasureUnit {
   if (middle >= 259_200) return { unit: 'd', factor: 1 / 86_400 };
   if (middle >= 10_800) return { unit: 'h', factor: 1 / 3600 };
@@ -112,11 +127,7 @@ export function unitOf(
   const largest = values.at(-1) ?? 1;
   switch (id) {
     case 'rate':
-      if (dimension === 'concentration') return prefixed('mol L⁻¹ s⁻¹', 1, largest);
-      if (dimension === 'pressure') {
-        return largest >= 1e3 ? { unit: 'kPa s⁻¹', factor: 1e-3 } : { unit: 'Pa s⁻¹', factor: 1 };
-      }
-      return largest >= 0.1 ? { unit: 's⁻¹', factor: 1 } : { unit: 'h⁻¹', factor: 3600 };
+      return prefixedRateUnit(dimension, largest);
     case 'perGram':
       return prefixed('mol g⁻¹ s⁻¹', 1e-3, largest);
     case 'turnover':
