@@ -3,9 +3,15 @@ import { getViteConfig } from 'astro/config';
 
 export default getViteConfig({
   test: {
-    coverage: { provider: 'v8', include: ['src/kinetics/**', 'src/screening/**', 'src/workbooks/**'] },
+    coverage: {
+      provider: 'v8',
+      include: ['src/kinetics/**', 'src/screening/**', 'src/workbooks/**'],
+    },
     projects: [
-      { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.ts', 'tests/unit/**/*.test.tsx'] } },
+      {
+        extends: true,
+        test: { name: 'unit', include: ['tests/unit/**/*.test.ts', 'tests/unit/**/*.test.tsx'] },
+      },
       {
         extends: true,
         test: {

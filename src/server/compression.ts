@@ -54,7 +54,7 @@ export function compressAnswers(request: IncomingMessage, response: ServerRespon
     response.once('close', () => gzip?.destroy());
   };
 
-  response.writeHead = ((status: number, ...rest: unknown[]) => {
+  response.writeHead = (status: number, ...rest: unknown[]) => {
     response.statusCode = status;
     const headers = rest.find((one) => typeof one === 'object' && one !== null);
     for (const [name, value] of Object.entries(headers ?? {})) {
@@ -62,7 +62,7 @@ export function compressAnswers(request: IncomingMessage, response: ServerRespon
     }
     begin();
     return plain.writeHead(response.statusCode);
-  });
+  };
 
   response.write = ((...args: unknown[]) => {
     if (!response.headersSent) response.writeHead(response.statusCode);
