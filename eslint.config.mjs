@@ -34,7 +34,7 @@ const outer = [
 const impure = ['node:*', 'react', 'astro', 'astro:*', 'drizzle-orm', 'mysql2', 'mysql2/*'];
 
 export default defineConfig(
-  { ignores: ['dist/', '.astro/', '.data/', '.test/', 'coverage/', 'node_modules/', 'drizzle/'] },
+  { ignores: ['dist/', '.astro/', '.data/', 'coverage/', 'node_modules/', 'drizzle/'] },
   js.configs.recommended,
   ...tseslint.configs.recommendedTypeChecked,
   ...astro.configs.recommended,

@@ -1,5 +1,5 @@
 import { mkdirSync, readdirSync, rmSync } from 'node:fs';
-import { join } from 'node:path';
+import { delimiter, join } from 'node:path';
 import { lastReason, run } from './processes.mjs';
 
 const environment = { ...process.env, DEBIAN_FRONTEND: 'noninteractive', LC_ALL: 'C' };
@@ -63,4 +63,15 @@ export async function unpackPackage(name, folder, log) {
   } finally {
     rmSync(work, { recursive: true, force: true });
   }
+}
+
+/** What a program that was unpacked under `folder` is run with, to find the libraries beside it. */
+export function unpackedEnvironment(folder) {
+  const triplet = { x64: 'x86_64-linux-gnu', arm64: 'aarch64-linux-gnu' }[process.arch] ?? '';
+  const paths = ['usr/lib', 'lib'].flatMap((lib) => [
+    join(folder, lib, triplet),
+    join(folder, lib),
+  ]);
+  const inherited = process.env.LD_LIBRARY_PATH;
+  return { LD_LIBRARY_PATH: [...paths, ...(inherited ? [inherited] : [])].join(delimiter) };
 }

@@ -1,6 +1,6 @@
 import { accessSync, constants, existsSync, realpathSync, renameSync, rmSync } from 'node:fs';
 import { delimiter, dirname, join } from 'node:path';
-import { installPackages, unpackPackage } from './debian.mjs';
+import { installPackages, unpackedEnvironment, unpackPackage } from './debian.mjs';
 import { run } from './processes.mjs';
 import { say, Stop } from './say.mjs';
 
@@ -72,7 +72,7 @@ async function describe(program, unpackedIn) {
   } catch {
     return null;
   }
-  const env = unpackedIn ? withLibraries(unpackedIn) : process.env;
+  const env = unpackedIn ? { ...process.env, ...unpackedEnvironment(unpackedIn) } : process.env;
   const { code, output } = await run(program, ['--no-defaults', '--version'], { env });
   const [version, ...parts] = /(\d+)\.(\d+)\.\d+/.exec(output) ?? [];
   if (code !== 0 || !version || !isRecent(parts.map(Number))) return null;
@@ -85,16 +85,3 @@ async function describe(program, unpackedIn) {
 
 const isRecent = ([major, minor]) =>
   major > oldestVersion[0] || (major === oldestVersion[0] && minor >= oldestVersion[1]);
-
-function withLibraries(folder) {
-  const triplet = { x64: 'x86_64-linux-gnu', arm64: 'aarch64-linux-gnu' }[process.arch] ?? '';
-  const paths = ['usr/lib', 'lib'].flatMap((lib) => [
-    join(folder, lib, triplet),
-    join(folder, lib),
-  ]);
-  const inherited = process.env.LD_LIBRARY_PATH;
-  return {
-    ...process.env,
-    LD_LIBRARY_PATH: [...paths, ...(inherited ? [inherited] : [])].join(':'),
-  };
-}

@@ -1,5 +1,5 @@
 /** The oldest Node.js that everything here runs on. */
-export const oldestNode = '20.3.0';
+export const oldestNode = '20.19.0';
 
 /** Why `version` (such as "20.20.2") is too old, in one line; null when it is not. */
 export function nodeVersionFault(version) {

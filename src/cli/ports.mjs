@@ -1,6 +1,7 @@
 import { createServer } from 'node:net';
 import { Stop } from './say.mjs';
 
+/** @returns {Promise<number>} the port that was listened on for a moment */
 function listenOnce(port, host) {
   return new Promise((resolve, reject) => {
     const server = createServer();

@@ -1,6 +1,10 @@
 import { z } from 'zod/v4';
 
-const appUrl = z.url({ protocol: /^https?$/, error: 'APP_URL must be a http or https address' });
+const appUrl = z.url({
+  protocol: /^https?$/,
+  error: 'APP_URL must be a http or https address',
+  abort: true,
+});
 
 const schema = z.object({
   PORT: z.coerce.number('PORT must be a number').int().min(1).max(65535).default(4321),

@@ -1,6 +1,6 @@
 import { execFileSync } from 'node:child_process';
-import { beforeAll, describe, expect, it } from 'vitest';
-import { callerWith, demoAccount, signInAs, type Caller } from './client';
+import { beforeAll, describe, expect, inject, it } from 'vitest';
+import { baseUrl, callerWith, demoAccount, signInAs, type Caller } from './client';
 
 interface Series {
   id: string;
@@ -129,7 +129,7 @@ describe('the batch endpoint', () => {
       plate().map((one) => ({ ...one, id: `${one.id}-${copy}` })),
     ).flat();
     const batch = send({ series });
-    const light = fetch(new URL('/healthz', process.env.E2E_BASE_URL));
+    const light = fetch(new URL('/healthz', baseUrl));
     const first = await Promise.race([batch.then(() => 'batch'), light.then(() => 'light')]);
     expect(first).toBe('light');
     expect((await light).status).toBe(200);
@@ -140,7 +140,7 @@ describe('the batch endpoint', () => {
     const { email } = demoAccount('Tarnside', 'analyst');
     const printed = execFileSync('npx', ['tsx', 'src/cli/token.ts', '--email', email], {
       encoding: 'utf8',
-      env: { ...process.env, DATABASE_URL: process.env.E2E_DATABASE_URL },
+      env: { ...process.env, DATABASE_URL: inject('databaseUrl') },
     });
     const token = printed.trimEnd().split('\n').at(-1) ?? '';
     const script = callerWith({ authorization: `Bearer ${token}`, origin: '' });

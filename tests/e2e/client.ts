@@ -1,6 +1,7 @@
+import { inject } from 'vitest';
 import accounts from '../../src/demo/accounts.json';
 
-export const baseUrl = process.env.E2E_BASE_URL ?? 'http://127.0.0.1:4321';
+export const baseUrl = inject('baseUrl');
 
 /** The demo account of a role in the group whose name begins with `group`. */
 export function demoAccount(group: 'Marlbeck' | 'Tarnside', role: string) {

@@ -7,9 +7,11 @@ const places = ['/usr/bin/chromium', '/usr/bin/chromium-browser'];
 /** Debian's Chromium without a window, which asks nobody but the pages it is shown. */
 export function openBrowser(): Promise<Browser> {
   const executablePath = process.env.CHROMIUM ?? places.find((place) => existsSync(place));
+  const libraries = process.env.CHROMIUM_LIBRARIES;
   if (!executablePath) throw new Error('Chromium is not installed: run npm test.');
   return chromium.launch({
     executablePath,
+    env: libraries ? { ...process.env, LD_LIBRARY_PATH: libraries } : process.env,
     args: [
       '--no-sandbox',
       '--disable-gpu',
