@@ -1,4 +1,4 @@
-import { mkdirSync, readdirSync, rmSync } from 'node:fs';
+import { existsSync, mkdirSync, readdirSync, rmSync } from 'node:fs';
 import { delimiter, join } from 'node:path';
 import { lastReason, run } from './processes.mjs';
 
@@ -69,9 +69,19 @@ export async function unpackPackage(name, folder, log) {
 export function unpackedEnvironment(folder) {
   const triplet = { x64: 'x86_64-linux-gnu', arm64: 'aarch64-linux-gnu' }[process.arch] ?? '';
   const paths = ['usr/lib', 'lib'].flatMap((lib) => [
-    join(folder, lib, triplet),
+    ...withSubfolders(join(folder, lib, triplet)),
     join(folder, lib),
   ]);
   const inherited = process.env.LD_LIBRARY_PATH;
   return { LD_LIBRARY_PATH: [...paths, ...(inherited ? [inherited] : [])].join(delimiter) };
+}
+
+/** Some packages keep libraries one folder deeper, which programs know by the system's path only. */
+function withSubfolders(path) {
+  if (!existsSync(path)) return [];
+  const folders = readdirSync(path, { withFileTypes: true }).filter((one) => one.isDirectory());
+  const holding = folders
+    .map(({ name }) => join(path, name))
+    .filter((deeper) => readdirSync(deeper).some((name) => /^lib.*\.so/.test(name)));
+  return [path, ...holding];
 }

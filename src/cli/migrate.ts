@@ -9,7 +9,7 @@ try {
 } catch (error) {
   const reason = error instanceof Error ? (error.cause ?? error) : error;
   console.error(
-    `The database could not be migrated: ${reason instanceof Error ? reason.message : String(reason)}`,
+    `The database could not be migrated: ${reason instanceof Error ? reason.message : String(reason)}.`,
   );
   process.exitCode = 1;
 }

@@ -49,7 +49,9 @@ export async function prepare() {
     AUTH_SECRET: process.env.AUTH_SECRET || keptSecret(home, 'auth-secret'),
     DATABASE_URL: process.env.DATABASE_URL || (await startDatabase({ home })),
   };
-  await runCommand('migrate', env);
+  await runCommand('migrate', env).catch((error) => {
+    throw process.env.DATABASE_URL ? new Stop(`${error.message} Check DATABASE_URL.`) : error;
+  });
   return { settings, env };
 }
 

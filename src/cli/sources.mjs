@@ -27,7 +27,7 @@ function filesUnder(root, part) {
   }
   return entries
     .filter((entry) => entry.isFile())
-    .map((entry) => join(entry.parentPath ?? entry.path, entry.name).slice(root.length + 1))
+    .map((entry) => join(entry.parentPath, entry.name).slice(root.length + 1))
     .sort();
 }
 

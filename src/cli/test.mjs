@@ -53,13 +53,21 @@ async function test(names) {
 /** What the suites need beside the packages, as environment variables. */
 async function provide(projects, home, shared) {
   const env = { TEST_HOME: home };
-  if (projects.includes('e2e')) Object.assign(env, await provideChromium(shared, process.env));
+  if (projects.includes('e2e'))
+    Object.assign(env, await provideChromium(shared, process.env).catch(tellStop));
   if (projects.some((name) => name !== 'unit')) {
     env.TEST_DATABASE_URL =
       process.env.TEST_DATABASE_URL ||
       (await startDatabase({ home, serverHome: shared })).replace(/\/ratewell$/, '/ratewell_test');
   }
   return env;
+}
+
+/** What fails for want of it says so itself; the rest is worth running. */
+function tellStop(error) {
+  if (!(error instanceof Stop)) throw error;
+  sayWhy(error);
+  return {};
 }
 
 async function runChecks() {
