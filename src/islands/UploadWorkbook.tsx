@@ -1,4 +1,4 @@
-import { useId, useRef, useState, type FormEvent } from 'react';
+import { useId, useRef, useState, type SubmitEvent } from 'react';
 import { screensHref } from '../contracts/links';
 import type { UploadAnswer } from '../contracts/screens';
 import { asApiError, type ApiError } from './api';
@@ -34,7 +34,7 @@ export function UploadWorkbook({ groupId, campaignId }: UploadWorkbookProps) {
     if (!named.current) setName(screenNameFrom(chosen.name));
   };
 
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault();
     const problem = file ? faultOfFile(file) : 'Choose a workbook first.';
     setFault(problem);

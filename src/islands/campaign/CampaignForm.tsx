@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState, type FormEvent } from 'react';
+import { useEffect, useRef, useState, type SubmitEvent } from 'react';
 import type { ReadingDimension } from '../../kinetics/types';
 import { asApiError, requestJson, type ApiError } from '../api';
 import { Button } from '../Button';
@@ -36,7 +36,7 @@ export function CampaignForm({ groupId }: { groupId: string }) {
     fault: faults[name],
     onChange: (value: string) => setFields((before) => ({ ...before, [name]: value })),
   });
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault();
     setError(null);
     const checked = campaignRequest(fields, groupId);

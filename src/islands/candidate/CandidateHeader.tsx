@@ -1,9 +1,10 @@
 import type { CandidateView } from '../../contracts/candidate';
 import { candidateHref } from '../../contracts/links';
+import { DecayMark } from '../DecayMark';
 import { formatDay } from '../dates';
+import { verdictWord } from '../../screening/decayMarks';
 import { FigureText } from './FigureText';
 import { cardFacts, headerFigures } from './headerFigures';
-import { VerdictMark } from './VerdictMark';
 
 /** Who the candidate is, what was found, and the numbers that it is judged by. */
 export function CandidateHeader({ view }: { view: CandidateView }) {
@@ -28,8 +29,19 @@ export function CandidateHeader({ view }: { view: CandidateView }) {
       </div>
 
       <div className="mt-4 flex items-start gap-4">
-        <VerdictMark verdict={result.verdict} order={result.order} large />
-        <p className="max-w-[68ch]">{view.explanation}</p>
+        <DecayMark
+          verdict={result.verdict}
+          order={result.order}
+          height={34}
+          silent
+          className="text-accent mt-1"
+        />
+        <div className="max-w-[68ch]">
+          <p className="text-lead font-semibold first-letter:uppercase">
+            {verdictWord(result.verdict, result.order)}
+          </p>
+          <p>{view.explanation}</p>
+        </div>
       </div>
 
       <dl className="mt-6 grid grid-cols-1 gap-x-8 gap-y-4 sm:grid-cols-2 xl:grid-cols-3">

@@ -1,4 +1,4 @@
-import { useEffect, useId, useRef, type FormEvent } from 'react';
+import { useEffect, useId, useRef, type SubmitEvent } from 'react';
 import type { DecisionAction } from '../../contracts/decisions';
 import { Button } from '../Button';
 import { actionLabels } from './decisionWords';
@@ -30,7 +30,7 @@ export function DecisionForm(props: DecisionFormProps) {
   const box = useRef<HTMLTextAreaElement>(null);
   const id = useId();
   useEffect(() => box.current?.focus(), [action]);
-  const submit = (event: FormEvent) => {
+  const submit = (event: SubmitEvent) => {
     event.preventDefault();
     onSubmit();
   };

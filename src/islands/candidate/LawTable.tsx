@@ -1,9 +1,9 @@
 import type { SeriesAnalysis } from '../../kinetics/types';
 import { readingUnitFor } from '../charts/displayUnits';
 import { plotNumber } from '../charts/plotNumber';
+import { DecayMark } from '../DecayMark';
 import { figureOf, percent } from './figures';
 import { lawRows, type LawRow } from './lawEvidence';
-import { VerdictMark } from './VerdictMark';
 
 const numeric = 'py-1.5 pr-4 text-right whitespace-nowrap tabular-nums';
 
@@ -68,11 +68,10 @@ function LawLine({ row, c0Factor, sdFactor }: { row: LawRow; c0Factor: number; s
   return (
     <tr className={`border-rule border-b align-top ${row.shown ? '' : 'text-quiet'}`}>
       <th scope="row" className="py-1.5 pr-4 text-left font-semibold whitespace-nowrap">
-        <VerdictMark
-          verdict={row.law === 'order' ? 'other' : row.law}
-          order={null}
-          word={row.name}
-        />
+        <span className="inline-flex items-center gap-2">
+          <DecayMark verdict={row.law === 'order' ? 'other' : row.law} silent />
+          {row.name}
+        </span>
       </th>
       <td className={numeric}>{k ? `${k.text} ${k.unit}` : '–'}</td>
       <td className={numeric}>{fit.c0 === null ? '–' : plotNumber(fit.c0 * c0Factor)}</td>

@@ -1,4 +1,4 @@
-import { useId, useRef, useState, type FormEvent } from 'react';
+import { useId, useRef, useState, type SubmitEvent } from 'react';
 import { asApiError, requestJson, type ApiError } from '../api';
 import { Button } from '../Button';
 import { ErrorNote } from '../ErrorNote';
@@ -44,7 +44,7 @@ export function TagEditor({ catalystId, code, tags: given, mayTag }: TagEditorPr
     }
   };
 
-  const submit = (event: FormEvent) => {
+  const submit = (event: SubmitEvent) => {
     event.preventDefault();
     const change = addTag(tags, typed);
     if ('refusal' in change) {

@@ -1,8 +1,10 @@
 import { useRef, type KeyboardEvent } from 'react';
 import type { CandidateWell } from '../../contracts/candidate';
 import { celsius } from '../charts/buildArrheniusOption';
+import { temperatureTints } from '../temperatureTints';
+import { WellDisc } from '../WellDisc';
+import { percent } from './figures';
 import { wellBeside, type WellGroup } from './wellGroups';
-import { WellFace } from './WellFace';
 
 export interface WellChooserProps {
   groups: readonly WellGroup[];
@@ -13,6 +15,7 @@ export interface WellChooserProps {
 /** Temperatures side by side, their replicates below each other; one stop for the Tab key. */
 export function WellChooser({ groups, chosen, onChoose }: WellChooserProps) {
   const box = useRef<HTMLDivElement>(null);
+  const tintOf = temperatureTints(groups.map(({ temperatureK }) => temperatureK));
   const onKeyDown = (event: KeyboardEvent) => {
     const next = wellBeside(groups, chosen, event.key);
     if (next === null) return;
@@ -36,6 +39,7 @@ export function WellChooser({ groups, chosen, onChoose }: WellChooserProps) {
               <WellRadio
                 key={well.wellId}
                 well={well}
+                tint={tintOf(temperatureK)}
                 checked={well.wellId === chosen}
                 onChoose={onChoose}
               />
@@ -49,16 +53,21 @@ export function WellChooser({ groups, chosen, onChoose }: WellChooserProps) {
 
 function WellRadio({
   well,
+  tint,
   checked,
   onChoose,
 }: {
   well: CandidateWell;
+  tint: string;
   checked: boolean;
   onChoose: (wellId: string) => void;
 }) {
+  const { analysis } = well;
+  const conversion = analysis.verdict === 'unusable' ? null : analysis.conversion;
   const name =
     `${well.plate}, ${well.position}, ${celsius(well.temperatureK)}` +
-    (well.replicate === null ? '' : `, replicate ${well.replicate}`);
+    (well.replicate === null ? '' : `, replicate ${well.replicate}`) +
+    (conversion === null ? ', no conversion' : `, ${percent(conversion)} converted`);
   return (
     <button
       type="button"
@@ -75,7 +84,12 @@ function WellRadio({
           : 'text-quiet hover:text-ink border-transparent'
       }`}
     >
-      <WellFace well={well} />
+      <WellDisc
+        conversion={conversion}
+        tint={tint}
+        ringed={analysis.verdict === 'forced'}
+        size={24}
+      />
       {well.position}
     </button>
   );

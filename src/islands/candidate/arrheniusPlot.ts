@@ -1,6 +1,6 @@
 import type { CandidateView } from '../../contracts/candidate';
-const temperatureColours = (_: number[]) => (_t: number) => '#884455';
 import type { ArrheniusPlot } from '../charts/buildArrheniusOption';
+import { temperatureTints } from '../temperatureTints';
 import { printedUnit } from './figures';
 
 /** The plot's points with their wells' names and colours; null when there is no line. */
@@ -10,7 +10,7 @@ export function arrheniusPlotOf(
 ): ArrheniusPlot | null {
   if (!arrhenius || arrhenius.points.length === 0) return null;
   const wellOf = new Map(wells.map((well) => [well.wellId, well]));
-  const colourOf = temperatureColours(arrhenius.points.map(({ temperatureK }) => temperatureK));
+  const colourOf = temperatureTints(wells.map(({ temperatureK }) => temperatureK));
   const symbol = result.basis === 'law' ? 'k' : 'r₀';
   return {
     points: arrhenius.points.map((point) => {

@@ -11,8 +11,9 @@ import { Sparkline } from './Sparkline';
 import { WhyButton } from './WhyButton';
 
 declare module '@tanstack/react-table' {
-  // eslint-disable-next-line @typescript-eslint/no-unused-vars -- the library's own signature
   interface ColumnMeta<TData extends RowData, TValue> {
+    /** Phantom: keeps the library's own type parameters in use. */
+    of?: [TData, TValue];
     /** px. */
     width: number;
     numeric?: boolean;

@@ -3,7 +3,8 @@ import { candidateHref } from '../../contracts/links';
 import type { ScreenWellRow } from '../../contracts/screens';
 import type { Verdict } from '../../kinetics/types';
 import { Button } from '../Button';
-import { VerdictMark } from '../candidate/VerdictMark';
+import { VerdictText } from '../DecayMark';
+import { WellDisc } from '../WellDisc';
 import { percent } from '../candidate/figures';
 import { celsius } from '../charts/buildArrheniusOption';
 import { countVerdicts, filterWells } from './wellFilter';
@@ -107,7 +108,10 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
                 <td className={numeric}>{celsius(well.temperatureK)}</td>
                 <td className={numeric}>{well.readings}</td>
                 <td className={numeric}>
-                  {well.conversion === null ? '–' : percent(well.conversion)}
+                  <span className="inline-flex items-center gap-2">
+                    {well.conversion === null ? '–' : percent(well.conversion)}
+                    <WellDisc conversion={well.conversion} tint="var(--accent)" size={18} />
+                  </span>
                 </td>
                 <td className={`${cell} whitespace-nowrap`}>
                   <WellVerdict verdict={well.verdict} />
@@ -128,5 +132,5 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
 
 function WellVerdict({ verdict }: { verdict: string | null }) {
   if (verdict === null) return <span className="text-quiet">not analysed</span>;
-  return <VerdictMark verdict={verdict as Verdict} order={null} />;
+  return <VerdictText verdict={verdict as Verdict} />;
 }
