@@ -19,6 +19,8 @@ export interface FitProblem {
   valueScale: number;
   /** Smallest scaled time above 0. */
   firstStep: number;
+  /** Σ(y − ȳ)² of the scaled readings. */
+  spread: number;
 }
 
 /** The mode of each kind of reading. */
@@ -46,13 +48,16 @@ export function scaleReadings(readings: Readings, kind: ReadingKind): FitProblem
   // A fraction has an absolute scale: 1 is complete conversion.
   const valueScale = mode === 'fraction' ? 1 : largest || 1;
   const t = Float64Array.from(since, (time) => time / timeScale);
+  const y = Float64Array.from(readings.values, (value) => value / valueScale);
+  const mean = y.reduce((sum, value) => sum + value, 0) / y.length;
   return {
     mode,
     t,
-    y: Float64Array.from(readings.values, (value) => value / valueScale),
+    y,
     originS,
     timeScale,
     valueScale,
     firstStep: t.find((value) => value > 0) ?? 1,
+    spread: y.reduce((sum, value) => sum + (value - mean) ** 2, 0),
   };
 }

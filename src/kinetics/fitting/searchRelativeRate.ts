@@ -1,5 +1,6 @@
 import type { RateLaw } from '../rateLaws/rateLaw';
 import type { FitProblem } from './problem';
+import { integralRate, profiledNewton } from './profiledNewton';
 import { lowestInBracket, rootInBracket } from './rootInBracket';
 
 /** The best kRel of a law for scaled readings, its amplitude profiled out. */
@@ -32,12 +33,55 @@ function searchGrid(problem: FitProblem, law: RateLaw): number[] {
   return grid;
 }
 
+/** A curve that leaves less of Σ(y − ȳ)² than this has no rival minimum. */
+const CLEARLY_FALLING = 0.2;
+
 /**
- * Global least-squares kRel of one law: the amplitude is linear and drops out (Golub & Pereyra
- * 1973), a grid over the decades brackets every minimum, and the two best are refined on the
- * analytic gradient to the last digits.
+ * Least-squares kRel of one law, its amplitude profiled out. Readings that clearly follow a falling
+ * curve of order 1 or more have one minimum, which Newton's method finds at once; the others are
+ * searched over the decades.
  */
 export function searchRelativeRate(problem: FitProblem, law: RateLaw): RelativeRate {
+  const quick = law.order >= 1 ? newtonRate(problem, law) : null;
+  return quick ?? searchDecades(problem, law);
+}
+
+function newtonRate(problem: FitProblem, law: RateLaw): RelativeRate | null {
+  const { t, y, mode } = problem;
+  const fixed = mode === 'fraction';
+  const start = mode === 'decay' ? integralRate(t, y, law.order < 1.5 ? 1 : 2) : 1;
+  if (!(start > 1e-3)) return null;
+  const sums = mode === 'decay' ? law.decaySums : law.growthSums;
+  const kRel = profiledNewton(sums, t, y, start, fixed);
+  if (!(kRel > 1e-3 && kRel < MOST_STEPS / problem.firstStep)) return null;
+  const found = residualsAt(problem, law, kRel);
+  return found.rss < CLEARLY_FALLING * problem.spread ? { ...found, kRel, atBound: false } : null;
+}
+
+function residualsAt(problem: FitProblem, law: RateLaw, kRel: number) {
+  const { t, y, mode } = problem;
+  const decay = mode === 'decay';
+  let [yy, ff] = [0, 0];
+  for (let i = 0; i < t.length; i += 1) {
+    const f = decay ? law.relative(kRel * t[i]!) : law.converted(kRel * t[i]!);
+    yy += f * y[i]!;
+    ff += f * f;
+  }
+  const amplitude = mode === 'fraction' ? 1 : yy / ff;
+  let rss = 0;
+  for (let i = 0; i < t.length; i += 1) {
+    const f = decay ? law.relative(kRel * t[i]!) : law.converted(kRel * t[i]!);
+    rss += (y[i]! - amplitude * f) ** 2;
+  }
+  return { amplitude, rss };
+}
+
+/**
+ * Global search: the amplitude is linear and drops out (Golub & Pereyra 1973), a grid over the
+ * decades brackets every minimum, and the two best are refined on the analytic gradient to the last
+ * digits.
+ */
+function searchDecades(problem: FitProblem, law: RateLaw): RelativeRate {
   const { t, y, mode } = problem;
   const n = t.length;
   const shape = new Float64Array(n);

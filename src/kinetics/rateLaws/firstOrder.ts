@@ -14,4 +14,25 @@ export const firstOrder = definePowerLaw({
   reach: (conversion) => -Math.log1p(-conversion),
   lowestU: -Infinity,
   straighten: (c) => Math.log(c),
+  decaySums(kRel, t, y, sums) {
+    let [p, p1, p2, q, q1, q2] = [0, 0, 0, 0, 0, 0];
+    for (let i = 0; i < t.length; i += 1) {
+      const ti = t[i]!;
+      const f = Math.exp(-kRel * ti);
+      const fy = f * y[i]!;
+      const ff = f * f;
+      p += fy;
+      p1 += ti * fy;
+      p2 += ti * ti * fy;
+      q += ff;
+      q1 += ti * ff;
+      q2 += ti * ti * ff;
+    }
+    sums[0] = p;
+    sums[1] = -p1;
+    sums[2] = p2;
+    sums[3] = q;
+    sums[4] = -2 * q1;
+    sums[5] = 4 * q2;
+  },
 });

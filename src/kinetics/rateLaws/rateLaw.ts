@@ -1,3 +1,4 @@
+import { shapeSumsOf, type ShapeSums } from '../fitting/shapeSums';
 import type { RateLawName, ReadingDimension } from '../types';
 import { rateConstantUnit } from './rateConstantUnit';
 
@@ -27,6 +28,8 @@ export interface RelativeForm {
   lowestU: number;
   /** The coordinate that is linear in t under this law, for eyes and starting values. */
   straighten(c: number): number;
+  /** The sums of a decay in one pass, where the law has a quicker way than its relative form. */
+  decaySums?: ShapeSums;
 }
 
 /** A rate law of the registry: its relative form and what follows from it. */
@@ -35,6 +38,9 @@ export interface RateLaw extends RelativeForm {
   slope(u: number): number;
   /** g''(u), from g' = −gⁿ. */
   bend(u: number): number;
+  /** Sums of the shapes g and 1 − g, for fits. */
+  decaySums: ShapeSums;
+  growthSums: ShapeSums;
   /** The curve as a function of time in s. */
   concentration(parameters: PowerLawParameters): (timeS: number) => number;
   /** −dC/dt at a concentration, base unit s⁻¹. */
@@ -60,19 +66,26 @@ export function definePowerLaw(form: RelativeForm): RateLaw {
   // For n < 1 the reactant is used up at u = 1/(1−n); a reading exactly there still carries slope.
   const exhaustedAt = n < 1 ? (1 + KINK_TOLERANCE) / (1 - n) : Infinity;
   const kRelOf = (k: number, c0: number) => k * c0 ** (n - 1);
-  return {
-    ...form,
-    slope(u) {
+  const shape = {
+    relative: (u: number) => form.relative(u),
+    converted: (u: number) => form.converted(u),
+    slope(u: number) {
       if (u > exhaustedAt) return 0;
       if (n === 0) return -1;
       const g = form.relative(u);
       return g > 0 ? -(g ** n) : 0;
     },
-    bend(u) {
+    bend(u: number) {
       if (n === 0 || u > exhaustedAt) return 0;
       const g = form.relative(u);
       return g > 0 ? n * g ** (2 * n - 1) : 0;
     },
+  };
+  return {
+    ...form,
+    ...shape,
+    decaySums: form.decaySums ?? shapeSumsOf(shape, false),
+    growthSums: shapeSumsOf(shape, true),
     concentration({ c0, k }) {
       const kRel = kRelOf(k, c0);
       return (timeS) => c0 * form.relative(kRel * timeS);

@@ -14,4 +14,25 @@ export const secondOrder = definePowerLaw({
   reach: (conversion) => conversion / (1 - conversion),
   lowestU: -1,
   straighten: (c) => 1 / c,
+  decaySums(kRel, t, y, sums) {
+    let [p, p1, p2, q, q1, q2] = [0, 0, 0, 0, 0, 0];
+    for (let i = 0; i < t.length; i += 1) {
+      const f = 1 / (1 + kRel * t[i]!);
+      const tf = t[i]! * f;
+      const fy = f * y[i]!;
+      const ff = f * f;
+      p += fy;
+      p1 += tf * fy;
+      p2 += tf * tf * fy;
+      q += ff;
+      q1 += tf * ff;
+      q2 += tf * tf * ff;
+    }
+    sums[0] = p;
+    sums[1] = -p1;
+    sums[2] = 2 * p2;
+    sums[3] = q;
+    sums[4] = -2 * q1;
+    sums[5] = 6 * q2;
+  },
 });
