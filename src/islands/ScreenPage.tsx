@@ -51,21 +51,28 @@ export function ScreenPage({ view, groupId }: ScreenPageProps) {
       <header>
         <div className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-2">
           <h1 className="display">{screen.name}</h1>
-          {may.analyse && !running && (
-            <Button
-              kind={analyses.length === 0 ? 'main' : 'plain'}
-              disabled={starting}
-              onClick={() => void analyse()}
-            >
-              {starting
-                ? 'Starting…'
-                : analyses.length === 0
-                  ? 'Analyse screen'
-                  : 'Analyse screen again'}
-            </Button>
-          )}
+          <div className="flex flex-wrap gap-2 print:hidden">
+            {current?.status === 'done' && !began && !running && (
+              <a href={leaderboardHref} className={buttonLook('plain')}>
+                See the leaderboard
+              </a>
+            )}
+            {may.analyse && !running && (
+              <Button
+                kind={analyses.length === 0 ? 'main' : 'plain'}
+                disabled={starting}
+                onClick={() => void analyse()}
+              >
+                {starting
+                  ? 'Starting…'
+                  : analyses.length === 0
+                    ? 'Analyse screen'
+                    : 'Analyse screen again'}
+              </Button>
+            )}
+          </div>
         </div>
-        <p className="mt-1">
+        <p className="mt-2">
           {screen.plates} {screen.plates === 1 ? 'plate' : 'plates'}, {screen.wells} wells,{' '}
           {screen.readings} readings. Uploaded by {screen.uploadedBy} on{' '}
           {formatInstant(screen.uploadedAt)}.
@@ -94,13 +101,6 @@ export function ScreenPage({ view, groupId }: ScreenPageProps) {
           {may.analyse
             ? 'One step fits every well, judges its order and brings it to the leaderboard.'
             : 'An analyst of the group can start that.'}
-        </p>
-      )}
-      {current?.status === 'done' && !began && !running && (
-        <p>
-          <a href={leaderboardHref} className={buttonLook('plain')}>
-            See the leaderboard
-          </a>
         </p>
       )}
 

@@ -1,26 +1,21 @@
 import { useMemo, useState } from 'react';
-import { candidateHref } from '../../contracts/links';
 import type { ScreenWellRow } from '../../contracts/screens';
-import type { Verdict } from '../../kinetics/types';
 import { Button } from '../Button';
-import { VerdictText } from '../DecayMark';
-import { WellDisc } from '../WellDisc';
-import { percent } from '../candidate/figures';
-import { celsius } from '../charts/buildArrheniusOption';
+import { PlateMaps } from './PlateMaps';
+import { inPlateOrder } from './plates';
 import { countVerdicts, filterWells } from './wellFilter';
+import { cell, narrowHidden, numeric, WellRow, WellVerdict } from './WellRow';
 
 const shownAtFirst = 96;
-const cell = 'py-1 pr-6';
-const numeric = 'py-1 pr-6 text-right tabular-nums';
-const columns: [name: string, numeric: boolean][] = [
-  ['Plate', false],
-  ['Well', false],
-  ['Catalyst', false],
-  ['Role', false],
-  ['Temperature', true],
-  ['Readings', true],
-  ['Conversion', true],
-  ['Verdict', false],
+const columns: [name: string, look: string][] = [
+  ['Plate', cell],
+  ['Well', cell],
+  ['Catalyst', cell],
+  ['Role', `${cell} ${narrowHidden}`],
+  ['Temperature', `${numeric} ${narrowHidden}`],
+  ['Readings', `${numeric} ${narrowHidden}`],
+  ['Conversion', numeric],
+  ['Verdict', cell],
 ];
 
 export interface WellsTableProps {
@@ -35,7 +30,11 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
   const [search, setSearch] = useState('');
   const [all, setAll] = useState(false);
   const counts = useMemo(() => countVerdicts(wells), [wells]);
-  const found = useMemo(() => filterWells(wells, { verdict, search }), [wells, verdict, search]);
+  const ordered = useMemo(() => inPlateOrder(wells), [wells]);
+  const found = useMemo(
+    () => filterWells(ordered, { verdict, search }),
+    [ordered, verdict, search],
+  );
   const shown = all ? found : found.slice(0, shownAtFirst);
   return (
     <section aria-labelledby="wells">
@@ -58,17 +57,18 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
               <span className="text-quiet tabular-nums">{count}</span>
             </button>
           ))}
-        <label className="ml-auto">
+        <label className="max-sm:w-full sm:ml-auto">
           <span className="sr-only">Search wells</span>
           <input
             type="search"
             value={search}
             placeholder="Plate, well or catalyst"
             onChange={(event) => setSearch(event.target.value)}
-            className="border-rule bg-sheet focus-visible:outline-accent min-h-9 rounded-[3px] border px-2 focus-visible:outline-2"
+            className="border-rule bg-sheet focus-visible:outline-accent min-h-9 rounded-[3px] border px-2 focus-visible:outline-2 max-sm:w-full"
           />
         </label>
       </div>
+      <PlateMaps wells={wells} found={found} groupId={groupId} campaignId={campaignId} />
       <p aria-live="polite" className="text-quiet text-[13px]">
         {found.length === wells.length
           ? `${wells.length} wells`
@@ -79,8 +79,8 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
           <caption className="sr-only">Wells of this screen</caption>
           <thead>
             <tr className="text-quiet border-rule border-b text-left text-[13px]">
-              {columns.map(([name, right]) => (
-                <th key={name} scope="col" className={`${right ? numeric : cell} font-normal`}>
+              {columns.map(([name, look]) => (
+                <th key={name} scope="col" className={`${look} font-normal`}>
                   {name}
                 </th>
               ))}
@@ -88,35 +88,7 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
           </thead>
           <tbody>
             {shown.map((well) => (
-              <tr key={well.wellId} className="border-rule border-b">
-                <td className={`${cell} whitespace-nowrap`}>{well.plate}</td>
-                <th scope="row" className={`${cell} text-left font-semibold tabular-nums`}>
-                  {well.position}
-                </th>
-                <td className={cell}>
-                  {well.catalystId ? (
-                    <a
-                      href={`${candidateHref(groupId, campaignId, well.catalystId)}?well=${well.wellId}`}
-                    >
-                      {well.catalyst}
-                    </a>
-                  ) : (
-                    <span className="text-quiet">{well.catalyst ?? 'none'}</span>
-                  )}
-                </td>
-                <td className={cell}>{well.role.replace('-', ' ')}</td>
-                <td className={numeric}>{celsius(well.temperatureK)}</td>
-                <td className={numeric}>{well.readings}</td>
-                <td className={numeric}>
-                  <span className="inline-flex items-center gap-2">
-                    {well.conversion === null ? '–' : percent(well.conversion)}
-                    <WellDisc conversion={well.conversion} tint="var(--accent)" size={18} />
-                  </span>
-                </td>
-                <td className={`${cell} whitespace-nowrap`}>
-                  <WellVerdict verdict={well.verdict} />
-                </td>
-              </tr>
+              <WellRow key={well.wellId} well={well} groupId={groupId} campaignId={campaignId} />
             ))}
           </tbody>
         </table>
@@ -128,9 +100,4 @@ export function WellsTable({ wells, groupId, campaignId }: WellsTableProps) {
       )}
     </section>
   );
-}
-
-function WellVerdict({ verdict }: { verdict: string | null }) {
-  if (verdict === null) return <span className="text-quiet">not analysed</span>;
-  return <VerdictText verdict={verdict as Verdict} />;
 }

@@ -1,4 +1,11 @@
 import type { ScreenWellRow } from '../../contracts/screens';
+import type { Verdict } from '../../kinetics/types';
+import { verdictWord } from '../../screening/decayMarks';
+
+/** The word of a well's verdict, or that it has none yet. */
+export function wellVerdictWord(verdict: string | null): string {
+  return verdict === null ? 'not analysed' : verdictWord(verdict as Verdict);
+}
 
 export interface WellFilter {
   /** Empty: every verdict. */
