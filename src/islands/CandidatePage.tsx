@@ -25,9 +25,27 @@ export function CandidatePage({ view, initialWellId = null }: CandidatePageProps
     return (group?.wells ?? []).filter((well) => well !== chosen);
   }, [groups, chosen]);
   return (
-    <div className="grid gap-x-12 gap-y-10 xl:grid-cols-[minmax(0,1fr)_17rem]">
-      <div className="min-w-0 space-y-12">
+    <div className="grid gap-x-12 gap-y-10 xl:grid-cols-[minmax(0,1fr)_17rem] xl:grid-rows-[auto_1fr]">
+      <div className="min-w-0">
         <CandidateHeader view={view} />
+      </div>
+      <aside className="border-rule border-t pt-6 xl:col-start-2 xl:row-span-2 xl:row-start-1 xl:border-t-0 xl:border-l xl:pt-0 xl:pl-8">
+        <div className="grid gap-x-12 gap-y-8 sm:max-xl:grid-cols-2 xl:sticky xl:top-7">
+          <DecisionPanel
+            catalystId={catalyst.id}
+            code={catalyst.code}
+            decision={view.decision}
+            may={view.may}
+          />
+          <TagEditor
+            catalystId={catalyst.id}
+            code={catalyst.code}
+            tags={view.tags}
+            mayTag={view.may.tag}
+          />
+        </div>
+      </aside>
+      <div className="min-w-0 space-y-12">
         <section aria-labelledby="wells">
           <h2 id="wells" className="mb-2 text-[18px] font-semibold">
             Wells
@@ -52,20 +70,6 @@ export function CandidatePage({ view, initialWellId = null }: CandidatePageProps
         </section>
         <ArrheniusSection view={view} chosen={chosen?.wellId ?? ''} onChoose={choose} />
       </div>
-      <aside className="border-rule space-y-8 border-t pt-6 xl:border-t-0 xl:border-l xl:pt-0 xl:pl-8">
-        <DecisionPanel
-          catalystId={catalyst.id}
-          code={catalyst.code}
-          decision={view.decision}
-          may={view.may}
-        />
-        <TagEditor
-          catalystId={catalyst.id}
-          code={catalyst.code}
-          tags={view.tags}
-          mayTag={view.may.tag}
-        />
-      </aside>
     </div>
   );
 }

@@ -3,8 +3,7 @@ import { useMemo, useState } from 'react';
 import type { Leaderboard as LeaderboardView } from '../contracts/leaderboard';
 import { asApiError, requestJson } from './api';
 import { Button } from './Button';
-import { readingUnitFor } from './charts/displayUnits';
-import { plotNumber } from './charts/plotNumber';
+import { conditionsOf } from './campaign/conditions';
 import { ErrorNote } from './ErrorNote';
 import { useAddressState } from './addressState';
 import { readLook, sortedBy, writeLook } from './leaderboard/address';
@@ -18,7 +17,7 @@ import { LeaderboardList } from './leaderboard/LeaderboardList';
 import { EmptyLeaderboard, PendingScreens } from './leaderboard/LeaderboardStates';
 import { LeaderboardTable } from './leaderboard/LeaderboardTable';
 import { useMedia, usePrinting } from './media';
-import { formatKelvinAsCelsius, formatPercent } from './numbers';
+import { formatPercent } from './numbers';
 
 export interface LeaderboardProps {
   initial: LeaderboardView;
@@ -81,13 +80,9 @@ function LiveLeaderboard({ initial, mayUpload, search = '' }: LeaderboardProps) 
 }
 
 function Conditions({ leaderboard: { campaign } }: { leaderboard: LeaderboardView }) {
-  const unit = readingUnitFor(campaign.dimension, campaign.referenceConcentration);
-  const amount = `${plotNumber(campaign.referenceConcentration * unit.factor)} ${unit.unit}`;
   return (
     <p className="text-quiet text-[13.5px]">
-      Compared at {formatKelvinAsCelsius(campaign.referenceTemperatureK)}, {amount}{' '}
-      {campaign.reactant} and {plotNumber(campaign.referenceLoadingGPerL)} g/L of catalyst, to{' '}
-      {formatPercent(campaign.targetConversion)} conversion
+      Compared {conditionsOf(campaign)}, to {formatPercent(campaign.targetConversion)} conversion
     </p>
   );
 }

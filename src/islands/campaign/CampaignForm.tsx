@@ -95,8 +95,9 @@ export function CampaignForm({ groupId }: { groupId: string }) {
         </div>
       </fieldset>
       <div>
+        <h3 className="mt-8">Conditions of the comparison</h3>
         <p className="text-quiet mb-3">
-          Candidates are compared at these conditions. Choose them inside the range that the screens
+          Every candidate’s rate is brought to these. Choose them inside the range that the screens
           measure.
         </p>
         <div className="grid gap-x-8 gap-y-5 sm:grid-cols-2">

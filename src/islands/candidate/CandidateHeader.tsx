@@ -4,7 +4,8 @@ import { DecayMark } from '../DecayMark';
 import { formatDay } from '../dates';
 import { verdictWord } from '../../screening/decayMarks';
 import { FigureText } from './FigureText';
-import { cardFacts, headerFigures } from './headerFigures';
+import { cardFacts, compositionOf, headerFigures } from './headerFigures';
+import { Warnings } from './Warnings';
 
 /** Who the candidate is, what was found, and the numbers that it is judged by. */
 export function CandidateHeader({ view }: { view: CandidateView }) {
@@ -15,12 +16,7 @@ export function CandidateHeader({ view }: { view: CandidateView }) {
       <div className="flex flex-wrap items-baseline justify-between gap-x-6">
         <h1 className="display">
           {catalyst.code}
-          {catalyst.composition && (
-            <span className="text-quiet ml-3 text-[18px] font-normal">
-              {catalyst.composition}
-              {catalyst.support && ` on ${catalyst.support}`}
-            </span>
-          )}
+          <span className="text-quiet ml-3 text-[18px] font-normal">{compositionOf(catalyst)}</span>
         </h1>
         <nav aria-label="Candidates beside this one" className="flex gap-4 print:hidden">
           {view.previous && <a href={linkTo(view.previous.id)}>← {view.previous.code}</a>}
@@ -59,18 +55,7 @@ export function CandidateHeader({ view }: { view: CandidateView }) {
         ))}
       </dl>
 
-      {view.warnings.length > 0 && (
-        <ul
-          aria-label="Warnings"
-          className="border-warning mt-6 list-none space-y-1 border-l-2 p-0 pl-4"
-        >
-          {view.warnings.map(({ code, sentence }) => (
-            <li key={`${code}-${sentence}`} className="max-w-[72ch]">
-              {sentence}
-            </li>
-          ))}
-        </ul>
-      )}
+      <Warnings warnings={view.warnings} except={view.explanation} className="mt-6" />
 
       <p className="text-quiet mt-4 text-[13px] leading-5">
         {cardFacts(view).map(([name, value], index) => (

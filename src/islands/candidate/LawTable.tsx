@@ -5,7 +5,7 @@ import { DecayMark } from '../DecayMark';
 import { figureOf, percent } from './figures';
 import { lawRows, type LawRow } from './lawEvidence';
 
-const numeric = 'py-1.5 pr-4 text-right whitespace-nowrap tabular-nums';
+const numeric = 'py-1.5 pr-4 text-right tabular-nums';
 
 /** The rival laws on one well, with what speaks for and against each. */
 export function LawTable({ analysis }: { analysis: SeriesAnalysis }) {
@@ -73,7 +73,7 @@ function LawLine({ row, c0Factor, sdFactor }: { row: LawRow; c0Factor: number; s
           {row.name}
         </span>
       </th>
-      <td className={numeric}>{k ? `${k.text} ${k.unit}` : '–'}</td>
+      <td className={`${numeric} whitespace-nowrap`}>{k ? `${k.text} ${k.unit}` : '–'}</td>
       <td className={numeric}>{fit.c0 === null ? '–' : plotNumber(fit.c0 * c0Factor)}</td>
       <td className={numeric}>
         {fit.residualSd === null ? '–' : plotNumber(fit.residualSd * sdFactor, 2)}
@@ -82,7 +82,7 @@ function LawLine({ row, c0Factor, sdFactor }: { row: LawRow; c0Factor: number; s
       <td className={numeric}>
         {fit.weight === null ? '–' : fit.weight < 0.001 ? '< 0.1 %' : percent(fit.weight)}
       </td>
-      <td className="min-w-56 py-1.5 pl-2">{row.words}</td>
+      <td className="min-w-48 py-1.5 pl-2">{row.words}</td>
     </tr>
   );
 }

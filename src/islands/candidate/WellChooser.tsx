@@ -29,7 +29,7 @@ export function WellChooser({ groups, chosen, onChoose }: WellChooserProps) {
       role="radiogroup"
       aria-label="Wells by temperature"
       onKeyDown={onKeyDown}
-      className="flex gap-x-6 gap-y-3 overflow-x-auto pb-1"
+      className="flex flex-wrap gap-x-6 gap-y-3"
     >
       {groups.map(({ temperatureK, wells }) => (
         <div key={temperatureK} role="presentation" className="shrink-0">

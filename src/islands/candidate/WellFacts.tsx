@@ -35,9 +35,9 @@ export function WellFacts({ well, fileName }: { well: CandidateWell; fileName: s
         : null,
     ],
     [
-      'Trend in residuals',
+      'Residual trend',
       analysis.lackOfFit
-        ? `${analysis.lackOfFit.significant ? 'yes, beyond chance' : 'none beyond chance'}${
+        ? `${analysis.lackOfFit.significant ? 'beyond chance' : 'none'}${
             analysis.lackOfFit.runsP === null
               ? ''
               : ` (p = ${plotNumber(analysis.lackOfFit.runsP, 2)})`

@@ -13,6 +13,7 @@ import type { WellPlot } from '../charts/decayChart';
 import { replicateSymbols } from '../charts/layers';
 import { LawTable } from './LawTable';
 import { ReadingsTable } from './ReadingsTable';
+import { Warnings } from './Warnings';
 import { WellFacts } from './WellFacts';
 import { describeDecay, residualPlotOf, wellPlotOf } from './wellPlot';
 
@@ -52,7 +53,7 @@ export function WellFit({ well, replicates, reactant, fileName }: WellFitProps) 
   const { quantity, timeUnit, readingUnit } = plot;
   return (
     <div>
-      <div className="grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,1fr)_15rem]">
+      <div className="grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,1fr)_17rem]">
         <div className="min-w-0">
           <Chart
             build={decay}
@@ -84,13 +85,11 @@ export function WellFit({ well, replicates, reactant, fileName }: WellFitProps) 
         </div>
         <div className="space-y-4">
           <p className="max-w-[60ch]">{well.explanation}</p>
-          {well.warnings.length > 0 && (
-            <ul className="border-warning m-0 list-none space-y-1 border-l-2 p-0 pl-3 text-[13.5px] leading-5">
-              {well.warnings.map(({ code, sentence }) => (
-                <li key={code}>{sentence}</li>
-              ))}
-            </ul>
-          )}
+          <Warnings
+            warnings={well.warnings}
+            except={well.explanation}
+            className="text-[13.5px] leading-5"
+          />
           <WellFacts well={well} fileName={fileName} />
         </div>
       </div>

@@ -59,6 +59,11 @@ export function figureOf(estimate: Estimate, unit: string, factor = 1): Figure {
   return { text, unit: printedUnit(unit), interval };
 }
 
+/** A figure that is known only between two bounds: the bounds stand in the value's place. */
+export function bracketFigure(figure: Figure): Figure {
+  return figure.interval === null ? figure : { ...figure, text: figure.interval, interval: null };
+}
+
 const spans = [
   { unit: 's', least: 0, factor: 1 },
   { unit: 'min', least: 180, factor: 1 / 60 },

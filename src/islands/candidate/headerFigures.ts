@@ -3,7 +3,9 @@ import { rateUnit } from '../../kinetics/rateLaws/rateConstantUnit';
 import { celsius } from '../charts/buildArrheniusOption';
 import { readingUnitFor } from '../charts/displayUnits';
 import { plotNumber } from '../charts/plotNumber';
-import { durationFigure, figureOf, type Figure } from './figures';
+import type { Estimate } from '../../kinetics/types';
+import { formulaText } from '../formula';
+import { bracketFigure, durationFigure, figureOf, type Figure } from './figures';
 
 /** One measured quantity of the header. */
 export interface HeaderFigure {
@@ -23,6 +25,9 @@ export function headerFigures({ result, campaign }: CandidateView): HeaderFigure
   const conditions =
     `${celsius(campaign.referenceTemperatureK)}, ${c}, ` +
     `${plotNumber(campaign.referenceLoadingGPerL)} g/L`;
+  const inBracket = (figure: Figure) => (result.bracket ? bracketFigure(figure) : figure);
+  const rate = (estimate: Estimate | null, unit: string) =>
+    estimate && inBracket(figureOf(estimate, unit));
   const bracket = result.bracket ? 'a bracket between zero and second order' : null;
   const ofInitialRates = result.activationEnergy === null && result.initialRateActivationEnergy;
   const energy = result.activationEnergy ?? result.initialRateActivationEnergy;
@@ -30,20 +35,20 @@ export function headerFigures({ result, campaign }: CandidateView): HeaderFigure
     {
       name: 'Rate',
       at: conditions,
-      figure: result.rateRef && figureOf(result.rateRef, rateUnit(dimension)),
+      figure: rate(result.rateRef, rateUnit(dimension)),
       note: result.rateRef ? bracket : 'cannot be given at these conditions',
     },
     {
       name: 'Rate per mass of catalyst',
       at: 'at the same conditions',
-      figure: result.rateRefPerMass && figureOf(result.rateRefPerMass, 'mol kg^-1 s^-1'),
+      figure: rate(result.rateRefPerMass, 'mol kg^-1 s^-1'),
       note: result.rateRefPerMass ? bracket : 'no reference loading',
     },
     {
       name: 'Turnover frequency',
       at: 'per site',
-      figure: result.turnoverFrequency && figureOf(result.turnoverFrequency, 's^-1'),
-      note: result.turnoverFrequency ? null : 'the card has no site density',
+      figure: rate(result.turnoverFrequency, 's^-1'),
+      note: result.turnoverFrequency ? bracket : 'the card has no site density',
     },
   ];
   return [
@@ -63,11 +68,19 @@ export function headerFigures({ result, campaign }: CandidateView): HeaderFigure
     {
       name: `Time to ${Math.round(campaign.targetConversion * 1000) / 10} % conversion`,
       at: `from ${c}`,
-      figure: result.timeToTarget && durationFigure(result.timeToTarget),
+      figure: result.timeToTarget && inBracket(durationFigure(result.timeToTarget)),
       note: result.timeToTarget ? bracket : 'cannot be given at these conditions',
     },
     ...(dimension === 'concentration' ? rates.slice(1) : []),
   ];
+}
+
+/** What the catalyst is made of; the support only where the composition does not say it. */
+export function compositionOf({ composition, support }: CandidateView['catalyst']): string {
+  if (!composition) return support ? formulaText(support) : '';
+  const both =
+    support && !composition.includes(support) ? `${composition} on ${support}` : composition;
+  return formulaText(both);
 }
 
 /** The catalyst's card as facts worth a line; what is unknown is left out. */
@@ -75,7 +88,7 @@ export function cardFacts({ catalyst }: CandidateView): [name: string, value: st
   const number = (value: number | null, unit: string) =>
     value === null ? null : `${plotNumber(value)} ${unit}`;
   const facts: [string, string | null][] = [
-    ['Support', catalyst.support],
+    ['Support', catalyst.support && formulaText(catalyst.support)],
     ['Metal loading', number(catalyst.metalLoadingPercent, '%')],
     ['Lot', catalyst.lot],
     ['Active sites', number(catalyst.siteDensityMolPerKg, 'mol/kg')],

@@ -1,7 +1,7 @@
 import type { GridComponentOption } from 'echarts/components';
 import type { ChartTheme } from './chartTheme';
 import { niceScale } from './niceScale';
-import { plotNumber } from './plotNumber';
+import { tickWriter } from './plotNumber';
 
 /** A linear axis: exact ends, and ticks only where they fall on round numbers. */
 export interface AxisPlan {
@@ -33,7 +33,7 @@ interface AxisLook {
 
 function common(
   plan: AxisPlan,
-  { theme, format = (value) => plotNumber(value), onZero = false }: AxisLook,
+  { theme, format = tickWriter(plan.ticks), onZero = false }: AxisLook,
 ) {
   return {
     type: 'value' as const,

@@ -24,6 +24,14 @@ export function plotNumber(value: number, digits = 4): string {
   return minus(String(Number(value.toPrecision(digits))));
 }
 
+/** Writes the ticks of one axis with the same number of decimals: `2.90`, `2.95`, `3.00`. */
+export function tickWriter(ticks: readonly number[]): (tick: number) => string {
+  const written = ticks.map((tick) => plotNumber(tick));
+  if (written.some((text) => text.includes('×'))) return (tick) => plotNumber(tick);
+  const decimals = Math.max(0, ...written.map((text) => text.split('.')[1]?.length ?? 0));
+  return (tick) => (tick === 0 ? '0' : minus(tick.toFixed(decimals)));
+}
+
 function minus(text: string): string {
   return text.replace('-', '−');
 }

@@ -51,8 +51,13 @@ export function HeatCell({ row, cell, campaign, scale, cells }: HeatCellProps) {
       ) : value === null ? (
         <span aria-hidden="true">–</span>
       ) : (
-        scale.format(value)
+        <HeatNumber text={scale.format(value)} />
       )}
     </a>
   );
+}
+
+/** A power of ten takes the room of two numbers; set smaller, it stays in its cell. */
+function HeatNumber({ text }: { text: string }) {
+  return text.includes('×') ? <span className="heat-power">{text}</span> : text;
 }

@@ -121,12 +121,13 @@ export function metricScale(
   }
 }
 
+/** A well without a reaction has no rate to compare: what is left is the scatter's sign and size. */
 function positive(
   valueOf: (cell: HeatmapCell) => number | null,
   factor: number,
 ): MetricScale['valueOf'] {
   return (cell) => {
-    const value = valueOf(cell);
+    const value = cell.verdict === 'no-reaction' ? null : valueOf(cell);
     return value !== null && value > 0 ? value * factor : null;
   };
 }

@@ -20,8 +20,10 @@ export function FigureCell(props: {
   row: LeaderboardRow;
   id: Exclude<MeasureId, 'k'>;
   section: string;
+  /** px; the row's. */
+  height?: number;
 }) {
-  const { row, id, section } = props;
+  const { row, id, section, height = rowHeight } = props;
   const { columns, sorted, leaders } = useForest();
   const measure = measures[id];
   const { axis, factor } = columns[id];
@@ -33,7 +35,7 @@ export function FigureCell(props: {
         mark={forestMark(estimate, axis, bracket)}
         axis={axis}
         leader={sorted === id ? scaleEstimate(leaders.get(section) ?? null, factor) : null}
-        height={rowHeight}
+        height={height}
       />
       {estimate ? (
         <FigureNumber text={figureText(estimate, { bracket, log: measure.scale === 'log' })} />

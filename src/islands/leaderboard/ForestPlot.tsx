@@ -3,7 +3,7 @@ import { plotNumber } from '../charts/plotNumber';
 import { placeOn, type ForestAxis, type ForestMark } from './forestAxis';
 
 /** px; the same in header and cells, so that dots stand under their ticks. */
-export const forestWidth = 100;
+export const forestWidth = 84;
 const inset = 5;
 const inner = forestWidth - 2 * inset;
 const at = (place: number) => Number((inset + inner * place).toFixed(1));

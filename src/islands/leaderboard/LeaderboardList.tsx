@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { candidateHref } from '../../contracts/links';
 import type { CampaignSummary, LeaderboardRow } from '../../contracts/leaderboard';
 import { stateLabels } from '../candidate/decisionWords';
+import { formulaText } from '../formula';
 import { formatPercent } from '../numbers';
 import { sortDirections, type LeaderboardLook, type SortId } from './address';
 import type { LeaderboardLine } from './arrange';
@@ -107,7 +108,7 @@ function ListItem(props: {
   const { row, rank, section } = line;
   return (
     <li>
-      <div className="flex items-baseline gap-2">
+      <div className="flex items-start gap-2">
         <span className="w-7 flex-none text-[13px]">
           <RankMark rank={rank} />
         </span>
@@ -119,18 +120,20 @@ function ListItem(props: {
         >
           {row.code}
         </a>
-        <span className="text-quiet truncate text-[13px]">{row.composition}</span>
+        <span className="text-quiet min-w-0 flex-1 truncate text-[13px]">
+          {formulaText(row.composition ?? '')}
+        </span>
+        <span className="flex-none text-[13px]">
+          <WhyButton row={row} />
+        </span>
       </div>
-      <div className="pl-9">
+      <div className="flex flex-wrap items-center gap-x-4 pl-9">
         {measure === 'k' ? (
           <RateConstantCell row={row} section={section.id} />
         ) : (
-          <FigureCell row={row} id={measure} section={section.id} />
+          <FigureCell row={row} id={measure} section={section.id} height={30} />
         )}
-        <div className="flex flex-wrap items-center gap-x-4 text-[13px]">
-          <WhyButton row={row} />
-          <ListFact row={row} sort={sort} />
-        </div>
+        <ListFact row={row} sort={sort} />
       </div>
     </li>
   );
@@ -147,5 +150,7 @@ function ListFact({ row, sort }: { row: LeaderboardRow; sort: SortId }) {
     sort === 'wells' ? `${row.wells} wells` : '',
     row.decision.state === 'open' ? '' : stateLabels[row.decision.state],
   ].filter(Boolean);
-  return facts.length === 0 ? null : <span className="font-semibold">{facts.join(', ')}</span>;
+  return facts.length === 0 ? null : (
+    <span className="ml-auto text-[13px] font-semibold">{facts.join(', ')}</span>
+  );
 }

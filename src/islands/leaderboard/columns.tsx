@@ -2,6 +2,7 @@ import type { ColumnDef, RowData } from '@tanstack/react-table';
 import { candidateHref } from '../../contracts/links';
 import type { CampaignSummary, LeaderboardRow } from '../../contracts/leaderboard';
 import { stateLabels } from '../candidate/decisionWords';
+import { formulaText } from '../formula';
 import { formatPercent } from '../numbers';
 import { WellDisc } from '../WellDisc';
 import { sortDirections, type ColumnId, type SortId } from './address';
@@ -59,17 +60,17 @@ export function leaderboardColumns(campaign: CampaignSummary, sort: SortId): Lea
       { measure: id },
     );
   return [
-    column('candidate', 'Candidate', 146, (row) => <Candidate row={row} campaign={campaign} />),
-    column('verdict', 'Verdict', 136, (row) => <WhyButton row={row} />),
-    column('decay', 'Decay', 68, (row) => <Sparkline readings={row.sparkline} />),
-    figure('rate', 216),
-    figure('time', 204),
-    column('k', 'Rate constant k', sort === 'k' ? 232 : 156, (row, section) => (
+    column('candidate', 'Candidate', 128, (row) => <Candidate row={row} campaign={campaign} />),
+    column('verdict', 'Verdict', 126, (row) => <WhyButton row={row} />),
+    column('decay', 'Decay', 62, (row) => <Sparkline readings={row.sparkline} />),
+    figure('rate', 192),
+    figure('time', 180),
+    column('k', 'Rate constant k', sort === 'k' ? 256 : 158, (row, section) => (
       <RateConstantCell row={row} section={section} />
     )),
-    figure('ea', 192),
-    column('conversion', 'Conversion', 92, ({ conversion }) => (
-      <span className="inline-flex items-center gap-2">
+    figure('ea', 170),
+    column('conversion', 'Conversion', 88, ({ conversion }) => (
+      <span className="flex items-center gap-2">
         <WellDisc conversion={conversion} tint="var(--accent)" />
         {conversion === null ? 'none' : formatPercent(conversion)}
       </span>
@@ -100,7 +101,7 @@ function Candidate({ row, campaign }: { row: LeaderboardRow; campaign: CampaignS
       >
         {code}
       </a>
-      <div className="text-quiet truncate text-[12.5px]">{composition}</div>
+      <div className="text-quiet truncate text-[12.5px]">{formulaText(composition ?? '')}</div>
     </div>
   );
 }

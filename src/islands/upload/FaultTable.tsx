@@ -30,7 +30,7 @@ export function FaultTable({ issues, caption, saveAs = null }: FaultTableProps) 
   return (
     <div>
       <div className="overflow-x-auto">
-        <table className="w-full border-collapse text-[13.5px] leading-5">
+        <table className="stacks w-full border-collapse text-[13.5px] leading-5">
           <caption className="sr-only">{caption}</caption>
           <thead>
             <tr className="text-quiet border-rule border-b text-left text-[13px]">
@@ -46,9 +46,13 @@ export function FaultTable({ issues, caption, saveAs = null }: FaultTableProps) 
               <tr key={index} className="border-rule border-b align-top">
                 <td className="py-1.5 pr-5 whitespace-nowrap">{issue.sheet}</td>
                 <td className="py-1.5 pr-5 font-semibold tabular-nums">{issue.cell ?? '–'}</td>
-                <td className="max-w-48 py-1.5 pr-5 wrap-anywhere">{issue.found ?? 'nothing'}</td>
-                <td className="min-w-36 py-1.5 pr-5">{issue.expected}</td>
-                <td className="min-w-64 py-1.5">{issue.message}</td>
+                <td data-column="found" className="max-w-48 min-w-18 py-1.5 pr-5 wrap-break-word">
+                  {issue.found ?? 'nothing'}
+                </td>
+                <td data-column="expected" className="min-w-32 py-1.5 pr-5">
+                  {issue.expected}
+                </td>
+                <td className="whole min-w-56 py-1.5">{issue.message}</td>
               </tr>
             ))}
           </tbody>

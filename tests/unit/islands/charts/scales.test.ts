@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { readingUnitFor, timeUnitFor } from '@/islands/charts/displayUnits';
 import { interpolate } from '@/islands/charts/interpolate';
 import { extent, niceScale } from '@/islands/charts/niceScale';
-import { plotNumber } from '@/islands/charts/plotNumber';
+import { plotNumber, tickWriter } from '@/islands/charts/plotNumber';
 import { spreadLabels } from '@/islands/charts/spreadLabels';
 
 describe('a round scale', () => {
@@ -98,5 +98,16 @@ describe('reading a drawn curve between its points', () => {
   it('knows nothing outside', () => {
     expect(interpolate(xs, xs, -1)).toBeNull();
     expect(interpolate(xs, xs, 1001)).toBeNull();
+  });
+});
+
+describe('the ticks of one axis', () => {
+  it('have the same number of decimals, and a bare zero', () => {
+    expect([2.9, 2.95, 3].map(tickWriter([2.9, 2.95, 3]))).toEqual(['2.90', '2.95', '3.00']);
+    expect([-0.5, 0, 0.5].map(tickWriter([-0.5, 0, 0.5]))).toEqual(['−0.5', '0', '0.5']);
+  });
+
+  it('keep powers of ten where one of them needs it', () => {
+    expect(tickWriter([0, 1e-4])(1e-4)).toBe('1 × 10⁻⁴');
   });
 });

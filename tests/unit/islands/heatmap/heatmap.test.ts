@@ -72,6 +72,13 @@ describe('a metric', () => {
     row('B', [cell({ initialRate: 1e-6 }), null]),
   ];
 
+  it('has no rate where there was no reaction, whatever sign the scatter gave it', () => {
+    const idle = cell({ verdict: 'no-reaction', initialRate: 3e-10, k: null });
+    const scale = metricScale('rate', [...rows, row('C', [idle, null])], 'concentration');
+    expect(scale.valueOf(idle)).toBeNull();
+    expect(scale.domain?.[0]).toBeCloseTo(0.1, 9);
+  });
+
   it('spreads rates over the whole ramp by their ratios', () => {
     const scale = metricScale('rate', rows, 'concentration');
     expect(scale.unit).toBe('µmol L⁻¹ s⁻¹');
