@@ -1,3 +1,4 @@
+import { residualsOf } from './fitting/fitLaw';
 import type { Readings } from './fitting/readings';
 import { collectReadings, resultDimension } from './fitting/readings';
 import { requestedRateLaw } from './rateLaws/registry';
@@ -148,7 +149,7 @@ function describeDeadWell(
     fits: fits.byName,
     shownLaw: 'zero',
     residualSd: zero.fit.residualSd,
-    lackOfFit: testLackOfFit(zero.relative.residuals, zero.relative.problem.valueScale),
+    lackOfFit: testLackOfFit(residualsOf(zero.relative), zero.relative.problem.valueScale),
     outliers: findOutliers(zero.relative, readings.indices),
     warnings: [...blank.warnings],
   };
@@ -172,7 +173,7 @@ function describeReactingWell(
   shown: FittedLaw,
 ): SeriesAnalysis {
   const isForced = series.law !== 'auto';
-  const lackOfFit = testLackOfFit(shown.relative.residuals, shown.relative.problem.valueScale);
+  const lackOfFit = testLackOfFit(residualsOf(shown.relative), shown.relative.problem.valueScale);
   const misses = !isForced && selection.order !== null && lackOfFit.significant;
   const isAsserted = isForced || (selection.order !== null && !misses);
   const { fit, law, initialRate } = shown;

@@ -1,4 +1,5 @@
 import type { RateLaw } from '../rateLaws/rateLaw';
+import { curveSums, leveragesOfCurve, residualsOfCurve, type CurveSums } from './curveSums';
 import type { FitProblem } from './problem';
 import { searchExhaustion } from './searchExhaustion';
 import { searchRelativeRate } from './searchRelativeRate';
@@ -24,10 +25,8 @@ export interface RelativeFit {
   rss: number;
   parameters: number;
   dof: number;
-  /** In time order. */
-  residuals: number[];
-  /** Diagonal of the hat matrix; null when the Jacobian is singular. */
-  leverages: number[] | null;
+  /** Scaled sums at the optimum; null when the Jacobian is singular, or for growth. */
+  regular: CurveSums | null;
 }
 
 const SINGULAR = 1e-13;
@@ -56,8 +55,7 @@ export function fitLaw(problem: FitProblem, law: RateLaw): RelativeFit {
 function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeFit {
   const { t, y, valueScale, timeScale } = problem;
   const squares = t.reduce((sum, value) => sum + value * value, 0);
-  const residuals = Array.from(y, (value, i) => value - slope * t[i]!);
-  const rss = residuals.reduce((sum, value) => sum + value * value, 0);
+  const rss = y.reduce((sum, value, i) => sum + (value - slope * t[i]!) ** 2, 0);
   const dof = t.length - 1;
   const unit = valueScale / timeScale;
   return {
@@ -73,8 +71,7 @@ function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeF
     rss: rss * valueScale * valueScale,
     parameters: 1,
     dof,
-    residuals: residuals.map((value) => value * valueScale),
-    leverages: squares > 0 ? Array.from(t, (value) => (value * value) / squares) : null,
+    regular: null,
   };
 }
 
@@ -85,32 +82,14 @@ function complete(
   kRel: number,
   atBound: boolean,
 ): RelativeFit {
-  const { t, y, mode, valueScale, timeScale } = problem;
-  const n = t.length;
-  const byAmplitude = new Float64Array(n);
-  const byRate = new Float64Array(n);
-  const residuals: number[] = [];
-  let [aa, ak, kk, rss] = [0, 0, 0, 0];
-  for (let i = 0; i < n; i += 1) {
-    const u = kRel * t[i]!;
-    const shape = mode === 'decay' ? law.relative(u) : law.converted(u);
-    const slope = amplitude * t[i]! * law.slope(u) * (mode === 'decay' ? 1 : -1);
-    byAmplitude[i] = mode === 'fraction' ? 0 : shape;
-    byRate[i] = slope;
-    const residual = y[i]! - amplitude * shape;
-    residuals.push(residual * valueScale);
-    rss += residual * residual;
-    aa += byAmplitude[i]! ** 2;
-    ak += byAmplitude[i]! * slope;
-    kk += slope * slope;
-  }
+  const { mode, valueScale, timeScale } = problem;
+  const sums = curveSums(problem, law, kRel, amplitude);
+  const { rss, aa, ak, kk } = sums;
   const parameters = mode === 'fraction' ? 1 : 2;
-  const dof = n - parameters;
-  if (mode === 'fraction') [aa, ak] = [1, 0];
+  const dof = problem.t.length - parameters;
   const determinant = aa * kk - ak * ak;
   const regular = !atBound && determinant > SINGULAR * aa * kk;
-  const variance = rss / dof;
-  const scaled = valueScale / timeScale;
+  const variance = rss / dof / determinant;
   return {
     law,
     problem,
@@ -119,23 +98,39 @@ function complete(
     growth: null,
     covariance: regular
       ? {
-          aa: mode === 'fraction' ? 0 : ((variance * kk) / determinant) * valueScale * valueScale,
-          ak: (-(variance * ak) / determinant) * scaled,
-          kk: (variance * aa) / determinant / (timeScale * timeScale),
+          aa: mode === 'fraction' ? 0 : variance * kk * valueScale * valueScale,
+          ak: (-variance * ak * valueScale) / timeScale,
+          kk: (variance * aa) / (timeScale * timeScale),
         }
       : null,
     rss: rss * valueScale * valueScale,
     parameters,
     dof,
-    residuals,
-    leverages: regular
-      ? residuals.map(
-          (_, i) =>
-            (kk * byAmplitude[i]! ** 2 -
-              2 * ak * byAmplitude[i]! * byRate[i]! +
-              aa * byRate[i]! ** 2) /
-            determinant,
-        )
-      : null,
+    regular: regular ? sums : null,
   };
+}
+
+/** y − curve in the reading's base unit, in time order. */
+export function residualsOf(fit: RelativeFit): number[] {
+  const { problem, law, growth } = fit;
+  const { t, y, valueScale, timeScale } = problem;
+  if (growth !== null) {
+    const slope = (growth.slope * timeScale) / valueScale;
+    return Array.from(y, (value, i) => (value - slope * t[i]!) * valueScale);
+  }
+  const amplitude = fit.amplitude! / valueScale;
+  return residualsOfCurve(problem, law, fit.kRel! * timeScale, amplitude).map(
+    (residual) => residual * valueScale,
+  );
+}
+
+/** Diagonal of the hat matrix, in time order; null when the Jacobian is singular. */
+export function leveragesOf(fit: RelativeFit): number[] | null {
+  const { problem, law, growth, regular } = fit;
+  if (growth !== null) {
+    const squares = problem.t.reduce((sum, value) => sum + value * value, 0);
+    return squares > 0 ? Array.from(problem.t, (value) => (value * value) / squares) : null;
+  }
+  if (regular === null) return null;
+  return leveragesOfCurve(problem, law, fit.kRel! * problem.timeScale, regular);
 }

@@ -41,23 +41,28 @@ export const MODE: Record<ReadingKind, ReadingMode> = {
  */
 export function scaleReadings(readings: Readings, kind: ReadingKind): FitProblem {
   const mode = MODE[kind];
-  const originS = mode === 'decay' ? readings.times[0]! : 0;
-  const since = readings.times.map((time) => Math.max(time - originS, 0));
-  const timeScale = since[since.length - 1]! || 1;
-  const largest = readings.values.reduce((max, value) => Math.max(max, Math.abs(value)), 0);
+  const { times, values } = readings;
+  const n = times.length;
+  const originS = mode === 'decay' ? times[0]! : 0;
+  const timeScale = Math.max(times[n - 1]! - originS, 0) || 1;
+  let [largest, sum] = [0, 0];
+  for (let i = 0; i < n; i += 1) {
+    const size = Math.abs(values[i]!);
+    if (size > largest) largest = size;
+  }
   // A fraction has an absolute scale: 1 is complete conversion.
   const valueScale = mode === 'fraction' ? 1 : largest || 1;
-  const t = Float64Array.from(since, (time) => time / timeScale);
-  const y = Float64Array.from(readings.values, (value) => value / valueScale);
-  const mean = y.reduce((sum, value) => sum + value, 0) / y.length;
-  return {
-    mode,
-    t,
-    y,
-    originS,
-    timeScale,
-    valueScale,
-    firstStep: t.find((value) => value > 0) ?? 1,
-    spread: y.reduce((sum, value) => sum + (value - mean) ** 2, 0),
-  };
+  const t = new Float64Array(n);
+  const y = new Float64Array(n);
+  let firstStep = 0;
+  for (let i = 0; i < n; i += 1) {
+    const since = Math.max(times[i]! - originS, 0) / timeScale;
+    t[i] = since;
+    y[i] = values[i]! / valueScale;
+    sum += y[i]!;
+    if (firstStep === 0 && since > 0) firstStep = since;
+  }
+  let spread = 0;
+  for (let i = 0; i < n; i += 1) spread += (y[i]! - sum / n) ** 2;
+  return { mode, t, y, originS, timeScale, valueScale, firstStep: firstStep || 1, spread };
 }

@@ -1,5 +1,6 @@
 import type { RateLaw } from '../rateLaws/rateLaw';
 import type { FitProblem } from './problem';
+import { fitAmplitude } from './curveSums';
 import { integralRate, profiledNewton } from './profiledNewton';
 import { lowestInBracket, rootInBracket } from './rootInBracket';
 
@@ -54,26 +55,8 @@ function newtonRate(problem: FitProblem, law: RateLaw): RelativeRate | null {
   const sums = mode === 'decay' ? law.decaySums : law.growthSums;
   const kRel = profiledNewton(sums, t, y, start, fixed);
   if (!(kRel > 1e-3 && kRel < MOST_STEPS / problem.firstStep)) return null;
-  const found = residualsAt(problem, law, kRel);
-  return found.rss < CLEARLY_FALLING * problem.spread ? { ...found, kRel, atBound: false } : null;
-}
-
-function residualsAt(problem: FitProblem, law: RateLaw, kRel: number) {
-  const { t, y, mode } = problem;
-  const decay = mode === 'decay';
-  let [yy, ff] = [0, 0];
-  for (let i = 0; i < t.length; i += 1) {
-    const f = decay ? law.relative(kRel * t[i]!) : law.converted(kRel * t[i]!);
-    yy += f * y[i]!;
-    ff += f * f;
-  }
-  const amplitude = mode === 'fraction' ? 1 : yy / ff;
-  let rss = 0;
-  for (let i = 0; i < t.length; i += 1) {
-    const f = decay ? law.relative(kRel * t[i]!) : law.converted(kRel * t[i]!);
-    rss += (y[i]! - amplitude * f) ** 2;
-  }
-  return { amplitude, rss };
+  const { amplitude, rss } = fitAmplitude(problem, law, kRel);
+  return rss < CLEARLY_FALLING * problem.spread ? { kRel, amplitude, rss, atBound: false } : null;
 }
 
 /**

@@ -9,6 +9,14 @@ export type ShapeSums = (
   sums: Float64Array,
 ) => void;
 
+/** Fills in f and f' = ∂f/∂kRel at every reading. */
+export type ShapeFill = (
+  kRel: number,
+  t: Float64Array,
+  f: Float64Array,
+  byRate: Float64Array,
+) => void;
+
 /** What of a law a shape is made of. */
 interface Shape {
   relative(u: number): number;
@@ -34,6 +42,18 @@ export function shapeSumsOf(law: Shape, growing: boolean): ShapeSums {
       sums[3]! += f * f;
       sums[4]! += 2 * f * first;
       sums[5]! += 2 * (first * first + f * second);
+    }
+  };
+}
+
+/** Values and slopes of any law, from its relative form; `growing` for the shape 1 − g. */
+export function shapeFillOf(law: Shape, growing: boolean): ShapeFill {
+  const sign = growing ? -1 : 1;
+  return (kRel, t, f, byRate) => {
+    for (let i = 0; i < t.length; i += 1) {
+      const u = kRel * t[i]!;
+      f[i] = growing ? law.converted(u) : law.relative(u);
+      byRate[i] = sign * t[i]! * law.slope(u);
     }
   };
 }

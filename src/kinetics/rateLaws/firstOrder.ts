@@ -14,6 +14,13 @@ export const firstOrder = definePowerLaw({
   reach: (conversion) => -Math.log1p(-conversion),
   lowestU: -Infinity,
   straighten: (c) => Math.log(c),
+  decayFill(kRel, t, f, byRate) {
+    for (let i = 0; i < t.length; i += 1) {
+      const value = Math.exp(-kRel * t[i]!);
+      f[i] = value;
+      byRate[i] = -t[i]! * value;
+    }
+  },
   decaySums(kRel, t, y, sums) {
     let [p, p1, p2, q, q1, q2] = [0, 0, 0, 0, 0, 0];
     for (let i = 0; i < t.length; i += 1) {

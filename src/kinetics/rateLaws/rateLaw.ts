@@ -1,4 +1,4 @@
-import { shapeSumsOf, type ShapeSums } from '../fitting/shapeSums';
+import { shapeFillOf, shapeSumsOf, type ShapeFill, type ShapeSums } from '../fitting/shapeSums';
 import type { RateLawName, ReadingDimension } from '../types';
 import { rateConstantUnit } from './rateConstantUnit';
 
@@ -28,8 +28,9 @@ export interface RelativeForm {
   lowestU: number;
   /** The coordinate that is linear in t under this law, for eyes and starting values. */
   straighten(c: number): number;
-  /** The sums of a decay in one pass, where the law has a quicker way than its relative form. */
+  /** A decay over all readings, where the law has a quicker way than its relative form. */
   decaySums?: ShapeSums;
+  decayFill?: ShapeFill;
 }
 
 /** A rate law of the registry: its relative form and what follows from it. */
@@ -38,9 +39,11 @@ export interface RateLaw extends RelativeForm {
   slope(u: number): number;
   /** g''(u), from g' = −gⁿ. */
   bend(u: number): number;
-  /** Sums of the shapes g and 1 − g, for fits. */
+  /** The shapes g and 1 − g over all readings, for fits. */
   decaySums: ShapeSums;
   growthSums: ShapeSums;
+  decayFill: ShapeFill;
+  growthFill: ShapeFill;
   /** The curve as a function of time in s. */
   concentration(parameters: PowerLawParameters): (timeS: number) => number;
   /** −dC/dt at a concentration, base unit s⁻¹. */
@@ -86,6 +89,8 @@ export function definePowerLaw(form: RelativeForm): RateLaw {
     ...shape,
     decaySums: form.decaySums ?? shapeSumsOf(shape, false),
     growthSums: shapeSumsOf(shape, true),
+    decayFill: form.decayFill ?? shapeFillOf(shape, false),
+    growthFill: shapeFillOf(shape, true),
     concentration({ c0, k }) {
       const kRel = kRelOf(k, c0);
       return (timeS) => c0 * form.relative(kRel * timeS);

@@ -14,6 +14,13 @@ export const secondOrder = definePowerLaw({
   reach: (conversion) => conversion / (1 - conversion),
   lowestU: -1,
   straighten: (c) => 1 / c,
+  decayFill(kRel, t, f, byRate) {
+    for (let i = 0; i < t.length; i += 1) {
+      const value = 1 / (1 + kRel * t[i]!);
+      f[i] = value;
+      byRate[i] = -t[i]! * value * value;
+    }
+  },
   decaySums(kRel, t, y, sums) {
     let [p, p1, p2, q, q1, q2] = [0, 0, 0, 0, 0, 0];
     for (let i = 0; i < t.length; i += 1) {

@@ -1,5 +1,5 @@
 import { studentTUpperTail } from '../statistics/tDistribution';
-import type { RelativeFit } from '../fitting/fitLaw';
+import { leveragesOf, residualsOf, type RelativeFit } from '../fitting/fitLaw';
 
 /** Chance that a well without outliers has any reading pointed out (Bonferroni over readings). */
 const OUTLIER_LEVEL = 0.002;
@@ -13,12 +13,13 @@ const ROUNDING = 1e-13;
  * @returns indices into the series as given, ascending
  */
 export function findOutliers(fit: RelativeFit, indices: readonly number[]): number[] {
-  const n = fit.residuals.length;
   const dof = fit.dof - 1;
-  if (dof < 1 || fit.leverages === null) return [];
+  const leverages = leveragesOf(fit);
+  if (dof < 1 || leverages === null) return [];
+  const n = leverages.length;
   const found: number[] = [];
-  fit.residuals.forEach((residual, i) => {
-    const free = 1 - fit.leverages![i]!;
+  residualsOf(fit).forEach((residual, i) => {
+    const free = 1 - leverages[i]!;
     if (free < 1e-9 || Math.abs(residual) < ROUNDING * fit.problem.valueScale) return;
     const without = Math.max(fit.rss - (residual * residual) / free, 0) / dof;
     const t = without > 0 ? Math.abs(residual) / Math.sqrt(without * free) : Infinity;
