@@ -1,4 +1,4 @@
-import { invertPositive } from '../fitting/levenbergMarquardt';
+import { invertPositive } from '../statistics/positiveDefinite';
 import { fUpperTail } from '../statistics/tDistribution';
 import type { ArrheniusPoint } from '../types';
 import { poolBlocks } from './fitArrhenius';

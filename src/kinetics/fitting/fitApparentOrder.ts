@@ -6,7 +6,7 @@ import {
   relativeOfOrder,
 } from '../rateLaws/apparentOrder';
 import type { RelativeFit } from './fitLaw';
-import { fitCurve, type CurveModel, type LeastSquaresFit } from './levenbergMarquardt';
+import { fitShape, type ShapeFit, type ShapeRange, type TwoParameterFill } from './fitShape';
 import type { ReadingMode } from './problem';
 
 /** The free order of −dC/dt = k Cⁿ in one well. */
@@ -23,30 +23,25 @@ export interface ApparentOrderFit {
 /** Where the search for n starts from a fit of order 0, 1 or 2: off the kink of n = 0. */
 const startOrder = (order: number) => (order === 0 ? 0.2 : order);
 
-/** Parameters (A, ln kRel, n), or (ln kRel, n) for a fraction. */
-function orderModel(mode: ReadingMode): CurveModel {
-  const offset = mode === 'fraction' ? 0 : 1;
-  const sign = mode === 'decay' ? 1 : -1;
-  return (p, t, gradient) => {
-    const a = offset === 1 ? p[0]! : 1;
-    const kRel = Math.exp(p[offset]!);
-    const n = p[offset + 1]!;
-    const u = kRel * t;
-    const g = relativeOfOrder(n, u);
-    const x = (n - 1) * u;
-    const shape = mode === 'decay' ? g : x <= -1 ? 1 : -Math.expm1(-u * log1pOver(x));
-    if (offset === 1) gradient[0] = shape;
-    gradient[offset] = g > 0 ? -sign * a * u * g ** n : 0;
-    gradient[offset + 1] = sign * a * orderSlope(n, u);
-    return a * shape;
-  };
-}
+const range: ShapeRange = { p: [-700, 700], q: [LOWEST_ORDER, HIGHEST_ORDER] };
+const SMALLEST_GAIN = 1e-12;
 
-function keepOrderInRange(position: number): (p: number[]) => void {
-  return (p) => {
-    p[position] = Math.min(Math.max(p[position]!, LOWEST_ORDER), HIGHEST_ORDER);
+/** Shape parameters ln kRel and n. */
+const orderFill =
+  (mode: ReadingMode): TwoParameterFill =>
+  (lnRate, order, t, f, byRate, byOrder) => {
+    const kRel = Math.exp(lnRate);
+    const sign = mode === 'decay' ? 1 : -1;
+    for (let i = 0; i < t.length; i += 1) {
+      const u = kRel * t[i]!;
+      const g = relativeOfOrder(order, u);
+      const x = (order - 1) * u;
+      f[i] = mode === 'decay' ? g : x <= -1 ? 1 : -Math.expm1(-u * log1pOver(x));
+      // −u gⁿ = −u g/(1 + (n−1)u), without a power.
+      byRate[i] = g > 0 ? (-sign * u * g) / (1 + x) : 0;
+      byOrder[i] = sign * orderSlope(order, u, g);
+    }
   };
-}
 
 /**
  * Fits the apparent order together with kRel and the amplitude, n between −1 and 4, from the two
@@ -63,25 +58,24 @@ export function fitApparentOrder(fits: readonly RelativeFit[]): ApparentOrderFit
   const first = starts[0];
   if (first === undefined) return null;
   const { problem } = first;
-  const size = problem.mode === 'fraction' ? 2 : 3;
-  const dof = problem.t.length - size;
+  const fixed = problem.mode === 'fraction';
+  const parameters = fixed ? 2 : 3;
+  const dof = problem.t.length - parameters;
   if (dof < 1) return null;
-  const model = orderModel(problem.mode);
-  let best: LeastSquaresFit | null = null;
+  const fill = orderFill(problem.mode);
+  let best: ShapeFit | null = null;
   for (const fit of starts) {
-    const start = [Math.log(fit.kRel! * problem.timeScale), startOrder(fit.law.order)];
-    if (size === 3) start.unshift(fit.amplitude! / problem.valueScale);
-    const found = fitCurve(model, problem.t, problem.y, start, keepOrderInRange(size - 1));
+    const start = { p: Math.log(fit.kRel! * problem.timeScale), q: startOrder(fit.law.order) };
+    const found = fitShape(fill, problem.t, problem.y, start, range, fixed, SMALLEST_GAIN);
     if (best === null || found.rss < best.rss) best = found;
   }
-  const order = best!.parameters[size - 1]!;
+  const { q: order, rss, inverse } = best!;
   const inside = order > LOWEST_ORDER && order < HIGHEST_ORDER;
-  const variance = best!.inverse?.[size - 1]?.[size - 1] ?? null;
   return {
     order,
-    orderSe: inside && variance !== null ? Math.sqrt((variance * best!.rss) / dof) : null,
-    rss: best!.rss * problem.valueScale ** 2,
-    parameters: size,
+    orderSe: inside && inverse !== null ? Math.sqrt((inverse.qq * rss) / dof) : null,
+    rss: rss * problem.valueScale ** 2,
+    parameters,
     dof,
   };
 }

@@ -18,15 +18,19 @@ export function relativeOfOrder(order: number, u: number): number {
   return x <= -1 ? 0 : Math.exp(-u * log1pOver(x));
 }
 
-/** ∂g/∂n at fixed u: −g u² M(x), M(x) = [1/(1+x) − log1p(x)/x]/x, by its series near x = 0. */
-export function orderSlope(order: number, u: number): number {
+/**
+ * ∂g/∂n at fixed u: −g u² M(x), M(x) = [1/(1+x) − log1p(x)/x]/x, by its series near x = 0.
+ *
+ * @param g the relative concentration there, where it is known already
+ */
+export function orderSlope(order: number, u: number, g = relativeOfOrder(order, u)): number {
   const x = (order - 1) * u;
   if (x <= -1) return 0;
   const m =
     Math.abs(x) < 1e-3
       ? -1 / 2 + x * (2 / 3 + x * (-3 / 4 + x * (4 / 5 - (5 / 6) * x)))
       : (1 / (1 + x) - Math.log1p(x) / x) / x;
-  return -relativeOfOrder(order, u) * u * u * m;
+  return -g * u * u * m;
 }
 
 /**

@@ -1,0 +1,160 @@
+/**
+ * A shape f(t; p, q) over all readings: fills in f, ∂f/∂p and ∂f/∂q, each as long as `t`.
+ */
+export type TwoParameterFill = (
+  p: number,
+  q: number,
+  t: Float64Array,
+  f: Float64Array,
+  byP: Float64Array,
+  byQ: Float64Array,
+) => void;
+
+/** Where p and q may lie; a step beyond an end stops there. */
+export interface ShapeRange {
+  p: readonly [low: number, high: number];
+  q: readonly [low: number, high: number];
+}
+
+/** The least-squares fit y = A f(t; p, q). */
+export interface ShapeFit {
+  amplitude: number;
+  p: number;
+  q: number;
+  rss: number;
+  /** (JᵀJ)⁻¹ of p and q, the amplitude eliminated; null where it is singular. */
+  inverse: { pp: number; pq: number; qq: number } | null;
+}
+
+const MOST_STEPS = 60;
+const MOST_DAMPING = 1e10;
+const SINGULAR = 1e-13;
+
+let f = new Float64Array(256);
+let byP = new Float64Array(256);
+let byQ = new Float64Array(256);
+
+/** Sums of one trial; a second set keeps the best so far. */
+interface Trial {
+  p: number;
+  q: number;
+  amplitude: number;
+  rss: number;
+  gp: number;
+  gq: number;
+  hpp: number;
+  hpq: number;
+  hqq: number;
+}
+
+/**
+ * Least squares with the amplitude profiled out (Golub & Pereyra 1973, with the Jacobian of Kaufman
+ * 1975) and Marquardt's damping (1963).
+ *
+ * @param fixed the amplitude is 1
+ * @param smallestGain relative fall of the sum of squares below which the search stops
+ */
+export function fitShape(
+  fill: TwoParameterFill,
+  t: Float64Array,
+  y: Float64Array,
+  start: { p: number; q: number },
+  range: ShapeRange,
+  fixed: boolean,
+  smallestGain: number,
+): ShapeFit {
+  makeRoom(t.length);
+  let best = tryAt(fill, t, y, start.p, start.q, fixed);
+  let damping = 1e-3;
+  for (let i = 0; i < MOST_STEPS && damping < MOST_DAMPING; i += 1) {
+    let gain = 0;
+    while (gain === 0 && damping < MOST_DAMPING) {
+      const hpp = best.hpp * (1 + damping) + 1e-300;
+      const hqq = best.hqq * (1 + damping) + 1e-300;
+      const determinant = hpp * hqq - best.hpq * best.hpq;
+      if (determinant > SINGULAR * hpp * hqq) {
+        const p = best.p + (hqq * best.gp - best.hpq * best.gq) / determinant;
+        const q = best.q + (hpp * best.gq - best.hpq * best.gp) / determinant;
+        const trial = tryAt(fill, t, y, within(p, range.p), within(q, range.q), fixed);
+        if (trial.rss < best.rss) {
+          gain = (best.rss - trial.rss) / best.rss;
+          best = trial;
+        }
+      }
+      damping = gain > 0 ? Math.max(damping / 8, 1e-12) : damping * 6;
+    }
+    if (gain < smallestGain) break;
+  }
+  const { amplitude, p, q, rss, hpp, hpq, hqq } = best;
+  const determinant = hpp * hqq - hpq * hpq;
+  const regular = determinant > SINGULAR * hpp * hqq;
+  return {
+    amplitude,
+    p,
+    q,
+    rss,
+    inverse: regular
+      ? { pp: hqq / determinant, pq: -hpq / determinant, qq: hpp / determinant }
+      : null,
+  };
+}
+
+function makeRoom(n: number): void {
+  if (f.length >= n) return;
+  f = new Float64Array(2 * n);
+  byP = new Float64Array(2 * n);
+  byQ = new Float64Array(2 * n);
+}
+
+const within = (value: number, [low, high]: readonly [number, number]) =>
+  Math.min(Math.max(value, low), high);
+
+function tryAt(
+  fill: TwoParameterFill,
+  t: Float64Array,
+  y: Float64Array,
+  p: number,
+  q: number,
+  fixed: boolean,
+): Trial {
+  fill(p, q, t, f, byP, byQ);
+  const n = t.length;
+  let [fy, ff, fp, fq, pp, pq, qq] = [0, 0, 0, 0, 0, 0, 0];
+  for (let i = 0; i < n; i += 1) {
+    const fi = f[i]!;
+    const pi = byP[i]!;
+    const qi = byQ[i]!;
+    fy += fi * y[i]!;
+    ff += fi * fi;
+    fp += fi * pi;
+    fq += fi * qi;
+    pp += pi * pi;
+    pq += pi * qi;
+    qq += qi * qi;
+  }
+  const amplitude = fixed ? 1 : ff > 0 ? fy / ff : 0;
+  let [rss, gp, gq] = [0, 0, 0];
+  for (let i = 0; i < n; i += 1) {
+    const residual = y[i]! - amplitude * f[i]!;
+    rss += residual * residual;
+    gp += residual * byP[i]!;
+    gq += residual * byQ[i]!;
+  }
+  if (!fixed && ff > 0) {
+    pp -= (fp * fp) / ff;
+    pq -= (fp * fq) / ff;
+    qq -= (fq * fq) / ff;
+  }
+  const square = amplitude * amplitude;
+  return {
+    p,
+    q,
+    amplitude,
+    rss: Number.isFinite(rss) ? rss : Infinity,
+    gp: amplitude * gp,
+    gq: amplitude * gq,
+    hpp: square * Math.max(pp, 0),
+    hpq: square * pq,
+    hqq: square * Math.max(qq, 0),
+  };
+}
