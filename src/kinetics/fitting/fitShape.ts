@@ -67,23 +67,17 @@ export function fitShape(
   let best = tryAt(fill, t, y, start.p, start.q, fixed);
   let damping = 1e-3;
   for (let i = 0; i < MOST_STEPS && damping < MOST_DAMPING; i += 1) {
-    let gain = 0;
-    while (gain === 0 && damping < MOST_DAMPING) {
-      const hpp = best.hpp * (1 + damping) + 1e-300;
-      const hqq = best.hqq * (1 + damping) + 1e-300;
-      const determinant = hpp * hqq - best.hpq * best.hpq;
-      if (determinant > SINGULAR * hpp * hqq) {
-        const p = best.p + (hqq * best.gp - best.hpq * best.gq) / determinant;
-        const q = best.q + (hpp * best.gq - best.hpq * best.gp) / determinant;
-        const trial = tryAt(fill, t, y, within(p, range.p), within(q, range.q), fixed);
-        if (trial.rss < best.rss) {
-          gain = (best.rss - trial.rss) / best.rss;
-          best = trial;
-        }
-      }
-      damping = gain > 0 ? Math.max(damping / 8, 1e-12) : damping * 6;
-    }
-    if (gain < smallestGain) break;
+    const step = dampedStep(best, range, damping);
+    const p = within(best.p + step.p, range.p);
+    const q = within(best.q + step.q, range.q);
+    // What the linearised curve promises; near the optimum it is what is still to be had.
+    const promised = (p - best.p) * best.gp + (q - best.q) * best.gq;
+    if (!(promised > 0)) break;
+    const trial = tryAt(fill, t, y, p, q, fixed);
+    const gained = trial.rss < best.rss;
+    if (gained) best = trial;
+    if (promised < smallestGain * best.rss) break;
+    damping = gained ? Math.max(damping / 8, 1e-12) : damping * 6;
   }
   const { amplitude, p, q, rss, hpp, hpq, hqq } = best;
   const determinant = hpp * hqq - hpq * hpq;
@@ -96,6 +90,24 @@ export function fitShape(
     inverse: regular
       ? { pp: hqq / determinant, pq: -hpq / determinant, qq: hpp / determinant }
       : null,
+  };
+}
+
+/** Marquardt's step; a parameter that its end of the range holds back stays there. */
+function dampedStep(at: Trial, range: ShapeRange, damping: number): { p: number; q: number } {
+  const held = (value: number, [low, high]: readonly [number, number], gradient: number) =>
+    (value <= low && gradient < 0) || (value >= high && gradient > 0);
+  const hpp = at.hpp * (1 + damping) + 1e-300;
+  const hqq = at.hqq * (1 + damping) + 1e-300;
+  const pHeld = held(at.p, range.p, at.gp);
+  const qHeld = held(at.q, range.q, at.gq);
+  const determinant = hpp * hqq - at.hpq * at.hpq;
+  if (pHeld || qHeld || !(determinant > SINGULAR * hpp * hqq)) {
+    return { p: pHeld ? 0 : at.gp / hpp, q: qHeld ? 0 : at.gq / hqq };
+  }
+  return {
+    p: (hqq * at.gp - at.hpq * at.gq) / determinant,
+    q: (hpp * at.gq - at.hpq * at.gp) / determinant,
   };
 }
 

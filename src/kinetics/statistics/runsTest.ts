@@ -13,8 +13,17 @@ export interface RunsTest {
   twoSided: number;
 }
 
+const lnFactorials = [0];
+
+/** ln n!; remembered, because a plate asks for few. */
+function lnFactorial(n: number): number {
+  if (n > 10_000) return lnGamma(n + 1);
+  for (let m = lnFactorials.length; m <= n; m += 1) lnFactorials.push(lnGamma(m + 1));
+  return lnFactorials[n]!;
+}
+
 const lnChoose = (n: number, k: number) =>
-  k < 0 || k > n ? -Infinity : lnGamma(n + 1) - lnGamma(k + 1) - lnGamma(n - k + 1);
+  k < 0 || k > n ? -Infinity : lnFactorial(n) - lnFactorial(k) - lnFactorial(n - k);
 
 function probabilityOfRuns(runs: number, plus: number, minus: number): number {
   const total = lnChoose(plus + minus, plus);

@@ -1,9 +1,22 @@
-import { studentTUpperTail } from '../statistics/tDistribution';
+import { studentTQuantile } from '../statistics/tDistribution';
 import { leveragesOf, residualsOf, type RelativeFit } from '../fitting/fitLaw';
 
 /** Chance that a well without outliers has any reading pointed out (Bonferroni over readings). */
 const OUTLIER_LEVEL = 0.002;
 const ROUNDING = 1e-13;
+
+const limits = new Map<string, number>();
+
+/** The studentised residual that stands out of `n`; remembered, because a plate asks for few. */
+function outlierLimit(n: number, dof: number): number {
+  const key = `${n} ${dof}`;
+  let limit = limits.get(key);
+  if (limit === undefined) {
+    limit = studentTQuantile(OUTLIER_LEVEL / (2 * n), dof);
+    if (limits.size < 1000) limits.set(key, limit);
+  }
+  return limit;
+}
 
 /**
  * Points out readings whose externally studentised residual is beyond chance (Cook & Weisberg
@@ -16,14 +29,14 @@ export function findOutliers(fit: RelativeFit, indices: readonly number[]): numb
   const dof = fit.dof - 1;
   const leverages = leveragesOf(fit);
   if (dof < 1 || leverages === null) return [];
-  const n = leverages.length;
+  const limit = outlierLimit(leverages.length, dof);
   const found: number[] = [];
   residualsOf(fit).forEach((residual, i) => {
     const free = 1 - leverages[i]!;
     if (free < 1e-9 || Math.abs(residual) < ROUNDING * fit.problem.valueScale) return;
     const without = Math.max(fit.rss - (residual * residual) / free, 0) / dof;
     const t = without > 0 ? Math.abs(residual) / Math.sqrt(without * free) : Infinity;
-    if (2 * n * studentTUpperTail(t, dof) < OUTLIER_LEVEL) found.push(indices[i]!);
+    if (t > limit) found.push(indices[i]!);
   });
   return found.sort((a, b) => a - b);
 }
