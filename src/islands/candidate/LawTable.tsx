@@ -1,11 +1,12 @@
 import type { SeriesAnalysis } from '../../kinetics/types';
-import { readingUnitFor } from '../charts/displayUnits';
+import { readingUnitFor, withUnit, type DisplayUnit } from '../charts/displayUnits';
 import { plotNumber } from '../charts/plotNumber';
 import { DecayMark } from '../DecayMark';
 import { figureOf, percent } from './figures';
 import { lawRows, type LawRow } from './lawEvidence';
 
-const numeric = 'py-1.5 pr-4 text-right tabular-nums';
+const numeric = 'py-1.5 pr-4 text-right whitespace-nowrap tabular-nums';
+const numericHead = 'py-1.5 pr-4 text-right font-normal';
 
 /** The rival laws on one well, with what speaks for and against each. */
 export function LawTable({ analysis }: { analysis: SeriesAnalysis }) {
@@ -19,29 +20,28 @@ export function LawTable({ analysis }: { analysis: SeriesAnalysis }) {
     analysis.dimension,
     Math.max(...rows.map(({ fit }) => fit.residualSd ?? 0)),
   );
-  const inUnit = (name: string, unit: string) => (unit === '' ? name : `${name}, ${unit}`);
   return (
-    <div className="overflow-x-auto">
-      <table className="w-full border-collapse text-[13.5px] leading-5">
+    <div className="overflow-x-auto" role="region" aria-label="Rival laws" tabIndex={0}>
+      <table className="stacks w-full border-collapse text-[13.5px] leading-5">
         <caption className="sr-only">Rate laws fitted to this well</caption>
         <thead>
           <tr className="text-quiet border-rule border-b text-left align-bottom text-[13px]">
             <th scope="col" className="py-1.5 pr-4 font-normal">
               Law
             </th>
-            <th scope="col" className={`${numeric} font-normal`}>
+            <th scope="col" className={numericHead}>
               k ± s.e.
             </th>
-            <th scope="col" className={`${numeric} font-normal`}>
-              {inUnit('C₀', c0.unit)}
+            <th scope="col" className={numericHead}>
+              {withUnit('C₀', c0.unit)}
             </th>
-            <th scope="col" className={`${numeric} font-normal`}>
-              {inUnit('Residual s.d.', sd.unit)}
+            <th scope="col" className={numericHead}>
+              {withUnit('Residual s.d.', sd.unit)}
             </th>
-            <th scope="col" className={`${numeric} font-normal`}>
+            <th scope="col" className={numericHead}>
               ΔAICc
             </th>
-            <th scope="col" className={`${numeric} font-normal`}>
+            <th scope="col" className={numericHead}>
               Weight
             </th>
             <th scope="col" className="py-1.5 pl-2 font-normal">
@@ -51,7 +51,7 @@ export function LawTable({ analysis }: { analysis: SeriesAnalysis }) {
         </thead>
         <tbody>
           {rows.map((row) => (
-            <LawLine key={row.law} row={row} c0Factor={c0.factor} sdFactor={sd.factor} />
+            <LawLine key={row.law} row={row} c0={c0} sd={sd} />
           ))}
         </tbody>
       </table>
@@ -59,7 +59,7 @@ export function LawTable({ analysis }: { analysis: SeriesAnalysis }) {
   );
 }
 
-function LawLine({ row, c0Factor, sdFactor }: { row: LawRow; c0Factor: number; sdFactor: number }) {
+function LawLine({ row, c0, sd }: { row: LawRow; c0: DisplayUnit; sd: DisplayUnit }) {
   const { fit } = row;
   const k =
     fit.k === null
@@ -73,16 +73,22 @@ function LawLine({ row, c0Factor, sdFactor }: { row: LawRow; c0Factor: number; s
           {row.name}
         </span>
       </th>
-      <td className={`${numeric} whitespace-nowrap`}>{k ? `${k.text} ${k.unit}` : '–'}</td>
-      <td className={numeric}>{fit.c0 === null ? '–' : plotNumber(fit.c0 * c0Factor)}</td>
-      <td className={numeric}>
-        {fit.residualSd === null ? '–' : plotNumber(fit.residualSd * sdFactor, 2)}
+      <td data-column="k" className={numeric}>
+        {k ? `${k.text} ${k.unit}` : '–'}
       </td>
-      <td className={numeric}>{row.deltaAicc === null ? '–' : row.deltaAicc.toFixed(1)}</td>
-      <td className={numeric}>
+      <td data-column={withUnit('C₀', c0.unit)} className={numeric}>
+        {fit.c0 === null ? '–' : plotNumber(fit.c0 * c0.factor)}
+      </td>
+      <td data-column={withUnit('residual s.d.', sd.unit)} className={numeric}>
+        {fit.residualSd === null ? '–' : plotNumber(fit.residualSd * sd.factor, 2)}
+      </td>
+      <td data-column="ΔAICc" className={numeric}>
+        {row.deltaAicc === null ? '–' : row.deltaAicc.toFixed(1)}
+      </td>
+      <td data-column="weight" className={numeric}>
         {fit.weight === null ? '–' : fit.weight < 0.001 ? '< 0.1 %' : percent(fit.weight)}
       </td>
-      <td className="min-w-48 py-1.5 pl-2">{row.words}</td>
+      <td className="whole min-w-48 py-1.5 pl-2">{row.words}</td>
     </tr>
   );
 }

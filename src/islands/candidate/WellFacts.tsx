@@ -40,7 +40,7 @@ export function WellFacts({ well, fileName }: { well: CandidateWell; fileName: s
         ? `${analysis.lackOfFit.significant ? 'beyond chance' : 'none'}${
             analysis.lackOfFit.runsP === null
               ? ''
-              : ` (p = ${plotNumber(analysis.lackOfFit.runsP, 2)})`
+              : ` (p\u00a0=\u00a0${plotNumber(analysis.lackOfFit.runsP, 2)})`
           }`
         : null,
     ],

@@ -18,7 +18,7 @@ export interface HeaderFigure {
 }
 
 /** The numbers that a candidate is judged by, with their conditions. */
-export function headerFigures({ result, campaign }: CandidateView): HeaderFigure[] {
+export function headerFigures({ result, campaign, catalyst }: CandidateView): HeaderFigure[] {
   const { dimension } = result;
   const concentration = readingUnitFor(dimension, campaign.referenceConcentration);
   const c = `${plotNumber(campaign.referenceConcentration * concentration.factor)} ${concentration.unit}`;
@@ -28,6 +28,10 @@ export function headerFigures({ result, campaign }: CandidateView): HeaderFigure
   const inBracket = (figure: Figure) => (result.bracket ? bracketFigure(figure) : figure);
   const rate = (estimate: Estimate | null, unit: string) =>
     estimate && inBracket(figureOf(estimate, unit));
+  const none =
+    result.verdict === 'no-reaction'
+      ? 'no reaction was seen'
+      : 'cannot be given at these conditions';
   const bracket = result.bracket ? 'a bracket between zero and second order' : null;
   const ofInitialRates = result.activationEnergy === null && result.initialRateActivationEnergy;
   const energy = result.activationEnergy ?? result.initialRateActivationEnergy;
@@ -36,19 +40,23 @@ export function headerFigures({ result, campaign }: CandidateView): HeaderFigure
       name: 'Rate',
       at: conditions,
       figure: rate(result.rateRef, rateUnit(dimension)),
-      note: result.rateRef ? bracket : 'cannot be given at these conditions',
+      note: result.rateRef ? bracket : none,
     },
     {
       name: 'Rate per mass of catalyst',
       at: 'at the same conditions',
       figure: rate(result.rateRefPerMass, 'mol kg^-1 s^-1'),
-      note: result.rateRefPerMass ? bracket : 'no reference loading',
+      note: result.rateRefPerMass ? bracket : result.rateRef ? 'no reference loading' : none,
     },
     {
       name: 'Turnover frequency',
       at: 'per site',
       figure: rate(result.turnoverFrequency, 's^-1'),
-      note: result.turnoverFrequency ? bracket : 'the card has no site density',
+      note: result.turnoverFrequency
+        ? bracket
+        : catalyst.siteDensityMolPerKg === null
+          ? 'the card has no site density'
+          : none,
     },
   ];
   return [
@@ -56,20 +64,28 @@ export function headerFigures({ result, campaign }: CandidateView): HeaderFigure
       name: 'Apparent activation energy',
       at: ofInitialRates ? 'of initial rates' : '',
       figure: energy && figureOf(energy, 'kJ/mol', 1e-3),
-      note: energy ? null : 'needs one law at more than one temperature',
+      note: energy
+        ? null
+        : result.verdict === 'no-reaction'
+          ? none
+          : 'needs one law at more than one temperature',
     },
     {
       name: 'Rate constant k',
       at: result.kRefTemperatureK === null ? '' : celsius(result.kRefTemperatureK),
       figure: result.kRef && figureOf(result.kRef, result.kUnit ?? ''),
-      note: result.kRef ? null : 'no order, so no k; rates below stand without one',
+      note: result.kRef
+        ? null
+        : result.rateRef
+          ? 'no order, so no k; the rates stand without one'
+          : 'no order, so no k',
     },
     ...rates.slice(0, 1),
     {
       name: `Time to ${Math.round(campaign.targetConversion * 1000) / 10} % conversion`,
       at: `from ${c}`,
       figure: result.timeToTarget && inBracket(durationFigure(result.timeToTarget)),
-      note: result.timeToTarget ? bracket : 'cannot be given at these conditions',
+      note: result.timeToTarget ? bracket : none,
     },
     ...(dimension === 'concentration' ? rates.slice(1) : []),
   ];

@@ -61,6 +61,7 @@ export function comparedRows(
 }
 
 const share = (value: number) => formatPercent(value);
+const wholePercent = (value: number) => `${Math.round(value * 100)} %`;
 
 /**
  * Scale, unit and colours of a metric.
@@ -112,7 +113,7 @@ export function metricScale(
     case 'misfit': {
       const valueOf = (cell: HeatmapCell) => cell.wellsWithLackOfFit / cell.wells;
       const base = { id, unit: 'of the wells', domain: [0, 1] as const, scale: 'linear' as const };
-      return { ...base, ramp: amountRamp, valueOf, format: share };
+      return { ...base, ramp: amountRamp, valueOf, format: wholePercent };
     }
     case 'verdict': {
       const base = { id, unit: '', domain: null, scale: 'linear' as const, ramp: amountRamp };
@@ -132,7 +133,8 @@ function positive(
   };
 }
 
-/** The colour of a value; null where the metric has none. */
-export function tintOf({ domain, scale, ramp }: MetricScale, value: number): string | null {
+/** The colour of a value; null where the metric has none, and where there is nothing to point at. */
+export function tintOf({ id, domain, scale, ramp }: MetricScale, value: number): string | null {
+  if (id === 'misfit' && value === 0) return null;
   return domain && ramp(shareOf(value, domain, scale));
 }

@@ -6,7 +6,9 @@ import { metricNames, type MetricScale } from './metrics';
 export function cellValue(cell: HeatmapCell, scale: MetricScale): string | null {
   const value = scale.valueOf(cell);
   if (value === null) return null;
-  return scale.unit === '' ? scale.format(value) : `${scale.format(value)} ${scale.unit}`;
+  if (scale.unit === '') return scale.format(value);
+  const times = scale.unit.startsWith('10') ? ' ×' : '';
+  return `${scale.format(value)}${times} ${scale.unit}`;
 }
 
 /** One sentence or two for those who do not see the colours: highest, lowest, missing. */

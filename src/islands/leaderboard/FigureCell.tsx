@@ -10,8 +10,9 @@ import { isBracket, measures, type MeasureId } from './measures';
 export const rowHeight = 44;
 
 const none = (
-  <span className="text-quiet" aria-label="none">
-    –
+  <span className="text-quiet">
+    <span aria-hidden="true">–</span>
+    <span className="sr-only">none</span>
   </span>
 );
 

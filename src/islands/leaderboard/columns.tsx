@@ -64,11 +64,11 @@ export function leaderboardColumns(campaign: CampaignSummary, sort: SortId): Lea
     column('verdict', 'Verdict', 126, (row) => <WhyButton row={row} />),
     column('decay', 'Decay', 62, (row) => <Sparkline readings={row.sparkline} />),
     figure('rate', 192),
-    figure('time', 180),
+    figure('time', 192),
     column('k', 'Rate constant k', sort === 'k' ? 256 : 158, (row, section) => (
       <RateConstantCell row={row} section={section} />
     )),
-    figure('ea', 170),
+    figure('ea', 184),
     column('conversion', 'Conversion', 88, ({ conversion }) => (
       <span className="flex items-center gap-2">
         <WellDisc conversion={conversion} tint="var(--accent)" />

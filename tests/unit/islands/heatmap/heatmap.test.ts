@@ -72,6 +72,14 @@ describe('a metric', () => {
     row('B', [cell({ initialRate: 1e-6 }), null]),
   ];
 
+  it('leaves cells without a misfit uncoloured, so that the others stand out', () => {
+    const misfit = [row('A', [cell({ wellsWithLackOfFit: 1 }), cell()])];
+    const scale = metricScale('misfit', misfit, 'concentration');
+    expect(tintOf(scale, 0)).toBeNull();
+    expect(tintOf(scale, 0.5)).not.toBeNull();
+    expect(scale.format(0.5)).toBe('50 %');
+  });
+
   it('has no rate where there was no reaction, whatever sign the scatter gave it', () => {
     const idle = cell({ verdict: 'no-reaction', initialRate: 3e-10, k: null });
     const scale = metricScale('rate', [...rows, row('C', [idle, null])], 'concentration');
@@ -96,7 +104,7 @@ describe('a metric', () => {
   it('keeps the power of ten of k in its unit', () => {
     const scale = metricScale('k', rows, 'concentration');
     expect(scale.unit).toBe('10⁻⁴ s⁻¹');
-    expect(cellValue(cell({ k: 3.456e-4 }), scale)).toBe('3.46 10⁻⁴ s⁻¹');
+    expect(cellValue(cell({ k: 3.456e-4 }), scale)).toBe('3.46 × 10⁻⁴ s⁻¹');
   });
 
   it('compares k only within one law', () => {
