@@ -43,7 +43,7 @@ export function CandidateHeader({ view }: { view: CandidateView }) {
       <dl className="mt-6 grid grid-cols-1 gap-x-8 gap-y-4 sm:grid-cols-2 xl:grid-cols-3">
         {headerFigures(view).map(({ name, at, figure, note }) => (
           <div key={name} className="border-rule border-t pt-2">
-            <dt className="text-quiet text-[13px] leading-5">
+            <dt className="text-quiet text-[13px] leading-5 sm:min-h-10">
               {name}
               {at && <span className="block">{at}</span>}
             </dt>

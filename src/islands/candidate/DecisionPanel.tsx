@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import type { CandidateView } from '../../contracts/candidate';
 import type { DecisionAction, DecisionRecord, DecisionState } from '../../contracts/decisions';
 import { asApiError, requestJson, type ApiError } from '../api';
@@ -30,7 +30,14 @@ export function DecisionPanel({ catalystId, code, decision, may }: DecisionPanel
   const [saving, setSaving] = useState(false);
   const [error, setError] = useState<ApiError | null>(null);
   const [notice, setNotice] = useState('');
+  const stands = useRef<HTMLParagraphElement>(null);
   const offered = offeredActions(now.state, may);
+
+  /** Back to where the candidate stands, so that the keyboard is not left in a form that is gone. */
+  const close = () => {
+    setAction(null);
+    stands.current?.focus();
+  };
 
   const submit = async () => {
     if (action === null) return;
@@ -49,8 +56,8 @@ export function DecisionPanel({ catalystId, code, decision, may }: DecisionPanel
       });
       setNow(answer);
       setNotice(`${code} is now ${stateLabels[answer.state]}.`);
-      setAction(null);
       setReason('');
+      close();
     } catch (thrown) {
       const refused = asApiError(thrown);
       const current = currentOf(refused);
@@ -71,7 +78,11 @@ export function DecisionPanel({ catalystId, code, decision, may }: DecisionPanel
     <section aria-label={`Decision on ${code}`} className="space-y-4">
       <div>
         <h2 className="text-quiet text-[13px] font-normal">Decision</h2>
-        <p className="text-[18px] leading-7 font-semibold first-letter:uppercase">
+        <p
+          ref={stands}
+          tabIndex={-1}
+          className="text-[18px] leading-7 font-semibold outline-none first-letter:uppercase"
+        >
           {stateLabels[now.state]}
         </p>
         <p aria-live="polite" className="sr-only">
@@ -108,8 +119,8 @@ export function DecisionPanel({ catalystId, code, decision, may }: DecisionPanel
           onReason={setReason}
           onSubmit={() => void submit()}
           onCancel={() => {
-            setAction(null);
             setFault(null);
+            close();
           }}
         />
       )}

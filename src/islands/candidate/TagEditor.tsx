@@ -58,7 +58,7 @@ export function TagEditor({ catalystId, code, tags: given, mayTag }: TagEditorPr
 
   return (
     <section aria-label={`Tags of ${code}`}>
-      <h3 className="text-quiet mb-1 text-[13px]">Tags</h3>
+      <h2 className="text-quiet mb-1 text-[13px] font-normal">Tags</h2>
       {tags.length === 0 && <p className="text-quiet text-[13.5px]">None yet.</p>}
       <ul className="m-0 flex list-none flex-wrap gap-1.5 p-0">
         {tags.map((tag) => (
