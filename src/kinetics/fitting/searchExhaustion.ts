@@ -23,14 +23,10 @@ const EXHAUSTION_LEVEL = 0.01;
  * of their ends is the global one, without iterating.
  */
 export function searchExhaustion(problem: FitProblem): ZeroOrderRate {
-  const candidates =
+  const best =
     problem.mode === 'decay'
-      ? decayCandidates(problem)
-      : problem.mode === 'growth'
-        ? growthCandidates(problem)
-        : fractionCandidates(problem);
-  let best = candidates[0]!;
-  for (const candidate of candidates) if (candidate.explained > best.explained) best = candidate;
+      ? bestDecay(problem)
+      : bestOf(problem.mode === 'growth' ? growthCandidates(problem) : fractionCandidates(problem));
   const rss = residualSquares(problem, best);
   const found = {
     kRel: best.kRel,
@@ -40,6 +36,10 @@ export function searchExhaustion(problem: FitProblem): ZeroOrderRate {
     slopeOnly: null,
   };
   return problem.mode === 'growth' ? believeExhaustion(problem, found) : found;
+}
+
+function bestOf(candidates: readonly Candidate[]): Candidate {
+  return candidates.reduce((best, one) => (one.explained > best.explained ? one : best));
 }
 
 function residualSquares(
@@ -72,32 +72,45 @@ function eachPrefix(
   }
 }
 
-function decayCandidates(problem: FitProblem): Candidate[] {
-  const candidates: Candidate[] = [];
-  eachPrefix(problem, ({ m, t, tt, y, ty, next }) => {
-    const determinant = m * tt - t * t;
+/**
+ * The decay that explains most: the best line through the first m readings where it runs out before
+ * the next, and the best curve that runs out just at the next.
+ */
+function bestDecay({ t, y }: FitProblem): Candidate {
+  const n = t.length;
+  let [st, stt, sy, sty] = [0, 0, 0, 0];
+  // Readings that are all 0, or a line through 0 at the first reading, leave nothing above.
+  let [explained, kRel, amplitude] = [-Infinity, 0, 0];
+  for (let i = 0; i < n; i += 1) {
+    const m = i + 1;
+    const time = t[i]!;
+    st += time;
+    stt += time * time;
+    sy += y[i]!;
+    sty += time * y[i]!;
+    const next = m < n ? t[m]! : Infinity;
+    if (!(next > time)) continue;
+    const determinant = m * stt - st * st;
     if (determinant > 0) {
-      const slope = (m * ty - t * y) / determinant;
-      const level = (y - slope * t) / m;
+      const slope = (m * sty - st * sy) / determinant;
+      const level = (sy - slope * st) / m;
       const runsOutAt = slope < 0 && level > 0 ? -level / slope : Infinity;
-      const lastTime = problem.t[m - 1]!;
-      if (runsOutAt >= lastTime && (runsOutAt <= next || next === Infinity) && level !== 0) {
-        candidates.push({
-          explained: level * y + slope * ty,
-          kRel: -slope / level,
-          amplitude: level,
-        });
+      const here = level * sy + slope * sty;
+      const fits = runsOutAt >= time && (runsOutAt <= next || next === Infinity);
+      if (fits && here > explained && level !== 0) {
+        [explained, kRel, amplitude] = [here, -slope / level, level];
       }
     }
     if (next < Infinity) {
-      const shapeY = y - ty / next;
-      const shapeShape = m - (2 * t) / next + tt / (next * next);
-      const amplitude = shapeY / shapeShape;
-      candidates.push({ explained: amplitude * shapeY, kRel: 1 / next, amplitude });
+      const shapeY = sy - sty / next;
+      const shapeShape = m - (2 * st) / next + stt / (next * next);
+      const here = (shapeY * shapeY) / shapeShape;
+      if (here > explained) {
+        [explained, kRel, amplitude] = [here, 1 / next, shapeY / shapeShape];
+      }
     }
-  });
-  // Readings that are all 0, or a line through 0 at the first reading, leave nothing above.
-  return candidates.length > 0 ? candidates : [{ explained: 0, kRel: 0, amplitude: 0 }];
+  }
+  return { explained, kRel, amplitude };
 }
 
 function growthCandidates(problem: FitProblem): Candidate[] {

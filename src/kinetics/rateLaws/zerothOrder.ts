@@ -15,4 +15,13 @@ export const zerothOrder = definePowerLaw({
   reach: (conversion) => conversion,
   lowestU: -Infinity,
   straighten: (c) => c,
+  decayFill(kRel, t, f, byRate) {
+    // A reading just where the reactant runs out still carries slope.
+    const exhausted = 1 + 1e-12;
+    for (let i = 0; i < t.length; i += 1) {
+      const u = kRel * t[i]!;
+      f[i] = u < 1 ? 1 - u : 0;
+      byRate[i] = u <= exhausted ? -t[i]! : 0;
+    }
+  },
 });
