@@ -9,7 +9,8 @@ export function addTag(tags: readonly string[], typed: string): TagChange {
   const tag = typed.trim().replace(/\s+/g, ' ');
   if (tag === '') return { refusal: 'Write a tag first.' };
   if (tag.length > longestTag) return { refusal: `A tag has at most ${longestTag} characters.` };
-  if (tags.includes(tag)) return { refusal: `“${tag}” is there already.` };
+  const known = tags.find((one) => one.toLowerCase() === tag.toLowerCase());
+  if (known !== undefined) return { refusal: `“${known}” is there already.` };
   if (tags.length >= mostTags) return { refusal: `At most ${mostTags} tags; remove one first.` };
   return { tags: [...tags, tag] };
 }
