@@ -32,7 +32,8 @@ function fill(problem: FitProblem, law: RateLaw, kRel: number): void {
 export function fitAmplitude(problem: FitProblem, law: RateLaw, kRel: number): CurveSums {
   fill(problem, law, kRel);
   const { y, mode } = problem;
-  let [fy, ff] = [0, 0];
+  let fy = 0;
+  let ff = 0;
   for (let i = 0; i < y.length; i += 1) {
     fy += f[i]! * y[i]!;
     ff += f[i]! * f[i]!;
@@ -56,7 +57,9 @@ export function curveSums(
 }
 
 function sumsAt(y: Float64Array, amplitude: number, aa: number, fixed: boolean): CurveSums {
-  let [rss, fd, dd] = [0, 0, 0];
+  let rss = 0;
+  let fd = 0;
+  let dd = 0;
   for (let i = 0; i < y.length; i += 1) {
     const residual = y[i]! - amplitude * f[i]!;
     const slope = byRate[i]!;

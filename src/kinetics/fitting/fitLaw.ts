@@ -2,7 +2,7 @@ import type { RateLaw } from '../rateLaws/rateLaw';
 import { curveSums, leveragesOfCurve, residualsOfCurve, type CurveSums } from './curveSums';
 import type { FitProblem } from './problem';
 import { searchExhaustion } from './searchExhaustion';
-import { searchRelativeRate } from './searchRelativeRate';
+import { searchRelativeRate, type RelativeRate } from './searchRelativeRate';
 
 /** Variances and covariance of (amplitude, kRel). */
 export interface AmplitudeRateCovariance {
@@ -42,14 +42,14 @@ export function fitLaw(problem: FitProblem, law: RateLaw): RelativeFit {
   if (law.order === 0) {
     const zero = searchExhaustion(problem);
     if (zero.slopeOnly !== null) return growthLine(problem, law, zero.slopeOnly);
-    return complete(problem, law, zero.amplitude, zero.kRel, false);
+    return complete(problem, law, zero);
   }
   const found = searchRelativeRate(problem, law);
   const line = found.amplitude * found.kRel;
   if (problem.mode === 'growth' && found.atBound && found.kRel < 1e-3) {
     return growthLine(problem, law, line);
   }
-  return complete(problem, law, found.amplitude, found.kRel, found.atBound);
+  return complete(problem, law, found);
 }
 
 function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeFit {
@@ -75,15 +75,10 @@ function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeF
   };
 }
 
-function complete(
-  problem: FitProblem,
-  law: RateLaw,
-  amplitude: number,
-  kRel: number,
-  atBound: boolean,
-): RelativeFit {
+function complete(problem: FitProblem, law: RateLaw, found: RelativeRate): RelativeFit {
+  const { amplitude, kRel, atBound } = found;
   const { mode, valueScale, timeScale } = problem;
-  const sums = curveSums(problem, law, kRel, amplitude);
+  const sums = found.sums ?? curveSums(problem, law, kRel, amplitude);
   const { rss, aa, ak, kk } = sums;
   const parameters = mode === 'fraction' ? 1 : 2;
   const dof = problem.t.length - parameters;

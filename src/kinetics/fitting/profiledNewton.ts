@@ -69,7 +69,10 @@ export function integralRate(t: Float64Array, y: Float64Array, order: 1 | 2): nu
   const n = t.length;
   let integral = 0;
   let before = order === 2 ? y[0]! * y[0]! : y[0]!;
-  let [si, sy, sii, siy] = [0, y[0]!, 0, 0];
+  let si = 0;
+  let sy = y[0]!;
+  let sii = 0;
+  let siy = 0;
   for (let i = 1; i < n; i += 1) {
     const yi = y[i]!;
     const power = order === 2 ? yi * yi : yi;

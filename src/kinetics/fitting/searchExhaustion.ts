@@ -33,6 +33,7 @@ export function searchExhaustion(problem: FitProblem): ZeroOrderRate {
     amplitude: best.amplitude,
     rss,
     atBound: false,
+    sums: null,
     slopeOnly: null,
   };
   return problem.mode === 'growth' ? believeExhaustion(problem, found) : found;
@@ -173,5 +174,5 @@ function believeExhaustion(problem: FitProblem, found: ZeroOrderRate): ZeroOrder
   const tail =
     dof > 0 ? 2 * studentTUpperTail(Math.sqrt((gain * dof) / (found.rss + rounding)), dof) : 1;
   if (tail < EXHAUSTION_LEVEL && found.kRel * t[t.length - 1]! > 1) return found;
-  return { kRel: 0, amplitude: 0, rss, atBound: false, slopeOnly: slope };
+  return { kRel: 0, amplitude: 0, rss, atBound: false, sums: null, slopeOnly: slope };
 }

@@ -1,6 +1,6 @@
 import type { RateLaw } from '../rateLaws/rateLaw';
 import type { FitProblem } from './problem';
-import { fitAmplitude } from './curveSums';
+import { fitAmplitude, type CurveSums } from './curveSums';
 import { integralRate, profiledNewton } from './profiledNewton';
 import { lowestInBracket, rootInBracket } from './rootInBracket';
 
@@ -13,6 +13,8 @@ export interface RelativeRate {
   rss: number;
   /** True when the search ended at the end of its range: kRel is then only a bound. */
   atBound: boolean;
+  /** Sums of the curve, where the search ended with them. */
+  sums: CurveSums | null;
 }
 
 /** Scaled kRel below which growth cannot be told from a straight line. */
@@ -52,11 +54,14 @@ function newtonRate(problem: FitProblem, law: RateLaw): RelativeRate | null {
   const fixed = mode === 'fraction';
   const start = mode === 'decay' ? integralRate(t, y, law.order < 1.5 ? 1 : 2) : 1;
   if (!(start > 1e-3)) return null;
-  const sums = mode === 'decay' ? law.decaySums : law.growthSums;
-  const kRel = profiledNewton(sums, t, y, start, fixed);
+  const sumsAt = mode === 'decay' ? law.decaySums : law.growthSums;
+  const kRel = profiledNewton(sumsAt, t, y, start, fixed);
   if (!(kRel > 1e-3 && kRel < MOST_STEPS / problem.firstStep)) return null;
-  const { amplitude, rss } = fitAmplitude(problem, law, kRel);
-  return rss < CLEARLY_FALLING * problem.spread ? { kRel, amplitude, rss, atBound: false } : null;
+  const sums = fitAmplitude(problem, law, kRel);
+  const { amplitude, rss } = sums;
+  return rss < CLEARLY_FALLING * problem.spread
+    ? { kRel, amplitude, rss, atBound: false, sums }
+    : null;
 }
 
 /**
@@ -126,5 +131,11 @@ function searchDecades(problem: FitProblem, law: RateLaw): RelativeRate {
   }
   const kRel = best?.kRel ?? 0;
   const rss = rssAt(kRel);
-  return { kRel, amplitude, rss, atBound: kRel <= grid[0]! || kRel >= grid[grid.length - 1]! };
+  return {
+    kRel,
+    amplitude,
+    rss,
+    atBound: kRel <= grid[0]! || kRel >= grid[grid.length - 1]!,
+    sums: null,
+  };
 }

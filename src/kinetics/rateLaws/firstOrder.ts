@@ -22,7 +22,12 @@ export const firstOrder = definePowerLaw({
     }
   },
   decaySums(kRel, t, y, sums) {
-    let [p, p1, p2, q, q1, q2] = [0, 0, 0, 0, 0, 0];
+    let p = 0;
+    let p1 = 0;
+    let p2 = 0;
+    let q = 0;
+    let q1 = 0;
+    let q2 = 0;
     for (let i = 0; i < t.length; i += 1) {
       const ti = t[i]!;
       const f = Math.exp(-kRel * ti);
