@@ -90,7 +90,9 @@ export function UploadWorkbook({ groupId, campaignId }: UploadWorkbookProps) {
             <Button kind="main" type="submit">
               Upload workbook
             </Button>
-            <a href={screensHref(groupId, campaignId)}>Back to the screens</a>
+            <a href={screensHref(groupId, campaignId)} className="min-h-6">
+              Back to the screens
+            </a>
           </div>
         )}
       </form>

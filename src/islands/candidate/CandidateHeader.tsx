@@ -19,8 +19,16 @@ export function CandidateHeader({ view }: { view: CandidateView }) {
           <span className="text-quiet ml-3 text-[18px] font-normal">{compositionOf(catalyst)}</span>
         </h1>
         <nav aria-label="Candidates beside this one" className="flex gap-4 print:hidden">
-          {view.previous && <a href={linkTo(view.previous.id)}>← {view.previous.code}</a>}
-          {view.next && <a href={linkTo(view.next.id)}>{view.next.code} →</a>}
+          {view.previous && (
+            <a className="min-h-6" href={linkTo(view.previous.id)}>
+              ← {view.previous.code}
+            </a>
+          )}
+          {view.next && (
+            <a className="min-h-6" href={linkTo(view.next.id)}>
+              {view.next.code} →
+            </a>
+          )}
         </nav>
       </div>
 
