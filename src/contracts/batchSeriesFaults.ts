@@ -62,12 +62,13 @@ export function findSeriesFaults(entry: unknown, index: number): BatchFault[] {
   const known = Object.values(unitsOfKind).flat();
   if (
     allowed !== undefined &&
+    typeof kind === 'string' &&
     typeof unit === 'string' &&
     known.includes(unit) &&
     !allowed.includes(unit)
   ) {
     fault(
-      `Unit ${unit} does not fit kind ${String(kind)}; use one of ${allowed.join(', ')}, or another kind`,
+      `Unit ${unit} does not fit kind ${kind}; use one of ${allowed.join(', ')}, or another kind`,
       'reading',
       'unit',
     );

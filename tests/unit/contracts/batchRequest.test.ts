@@ -207,7 +207,7 @@ describe('sizes', () => {
     const problem = problemOf({ series: new Array(MOST_SERIES + 1).fill(null) });
     expect(problem.status).toBe(413);
     expect(problem.errors).toEqual([
-      { path: '/series', message: expect.stringContaining('20,000') },
+      { path: '/series', message: expect.stringContaining('20,000') as string },
     ]);
   });
   it('more readings than 2,000,000 are too large', () => {
