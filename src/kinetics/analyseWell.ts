@@ -23,6 +23,8 @@ export interface AnalysedWell {
   analysis: SeriesAnalysis;
   evidence: Evidence | null;
   freeOrder: FreeOrder | null;
+  /** Whether it reacts at all; null where the well is unusable. */
+  decay: Pick<DecayTest, 'p' | 'trendTail'> | null;
   /** C at the first reading by the shown law, base unit; null where C0 is not known. */
   firstConcentration: number | null;
 }
@@ -50,7 +52,14 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   const few = readings.values.length < FEWEST_READINGS;
   if (few || readings.distinctTimes < FEWEST_READINGS) {
     blank.warnings.push(few ? 'too-few-readings' : 'too-few-distinct-times');
-    return { series, analysis: blank, evidence: null, freeOrder: null, firstConcentration: null };
+    return {
+      series,
+      analysis: blank,
+      evidence: null,
+      freeOrder: null,
+      decay: null,
+      firstConcentration: null,
+    };
   }
 
   const fits = fitWell(series, readings, forced);
@@ -84,6 +93,7 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
     analysis,
     evidence: fits.evidence,
     freeOrder: fits.apparentOrder,
+    decay,
     firstConcentration: shown.firstConcentration,
   };
 }
@@ -160,6 +170,7 @@ function describeDeadWell(
     analysis,
     evidence: null,
     freeOrder: null,
+    decay,
     firstConcentration: zero.firstConcentration,
   };
 }

@@ -10,7 +10,9 @@ import type {
   Verdict,
   WarningCode,
 } from '../types';
+import { blanksReact } from './blanksReact';
 import { describeByInitialRate } from './initialRateBasis';
+import { anyDecay } from './jointDecay';
 import { describeByLaw } from './lawBasis';
 import { poolEvidence, type PooledVerdict } from './poolEvidence';
 import { fitUnder, type BasisResult, type PooledWell } from './pooledWell';
@@ -48,7 +50,9 @@ export function analyseCatalyst(
   const usable = wells.filter((well) => well.analysis.verdict !== 'unusable');
   const dimension = (usable[0] ?? wells[0])?.analysis.dimension ?? 'concentration';
   const same = usable.filter((well) => well.analysis.dimension === dimension);
-  const reacting = same.filter((well) => well.analysis.verdict !== 'no-reaction');
+  const reacting = anyDecay(same)
+    ? same.filter((well) => well.analysis.verdict !== 'no-reaction')
+    : [];
   const loading = poolLoading(
     reacting.map((well) => well.series.loadingGPerL),
     reference.loadingGPerL,
@@ -130,15 +134,6 @@ function sharedRequest(requests: readonly LawRequest[]): LawRequest | null | 'mi
   const keys = new Set(requests.map((request) => JSON.stringify(request)));
   if (keys.size > 1) return 'mixed';
   return requests[0] === undefined || requests[0] === 'auto' ? null : requests[0];
-}
-
-function blanksReact(blanks: readonly AnalysedWell[], wells: readonly PooledWell[]): boolean {
-  return blanks.some(
-    ({ analysis }) =>
-      analysis.verdict !== 'no-reaction' &&
-      analysis.verdict !== 'unusable' &&
-      wells.some((well) => Math.abs(well.series.temperatureK - analysis.temperatureK) <= 5),
-  );
 }
 
 /** Per kilogram of catalyst: mol L⁻¹ s⁻¹ over g/L is mol g⁻¹ s⁻¹. */

@@ -11,9 +11,16 @@ export interface DecayTest {
   rate: number;
   rateSe: number | null;
   dof: number;
+  /** Chance of such readings from a dead well; at most `DECAY_LEVEL` where the outcome is `decays`. */
+  p: number;
+  /** One-sided tail of the straight line's slope: near 0 for a clear fall, near 1 for a rise. */
+  trendTail: number;
   /** 1 − C(t_last)/C(t_first) along that line; null for growth, where C0 is not known. */
   conversion: number | null;
 }
+
+/** Chance that a dead well is said to decay. */
+export const DECAY_LEVEL = 0.02;
 
 /**
  * Levels of the two one-sided tests. Together they keep 98 % of dead wells as flat: the second
@@ -58,16 +65,15 @@ export function testForDecay(
     dof: trend.dof,
     conversion: relativeFall(mode, fall, first, unit),
   };
-  if (Math.abs(Math.max(...y) - Math.min(...y)) <= ROUNDING) return { ...result, outcome: 'flat' };
+  if (Math.abs(Math.max(...y) - Math.min(...y)) <= ROUNDING) {
+    return { ...result, outcome: 'flat', p: 1, trendTail: 0.5 };
+  }
 
   const floor = y.length * ROUNDING ** 2;
   const span = times[times.length - 1]! - times[0]!;
   const se = Math.max(trend.slopeSe ?? Infinity, ROUNDING / span);
   const tail = studentTUpperTail((direction * trend.slope) / se, Math.max(trend.dof, 1));
-  if (tail < TREND_LEVEL) return { ...result, outcome: 'decays' };
-  if (tail < PLAIN_LEVEL && (result.conversion ?? 0) >= PLAIN_CONVERSION) {
-    return { ...result, outcome: 'decays' };
-  }
+  const plain = (result.conversion ?? 0) >= PLAIN_CONVERSION ? tail / PLAIN_LEVEL : Infinity;
 
   const mean = y.reduce((sum, value) => sum + value / y.length, 0);
   const flatRss = y.reduce((sum, value) => sum + (value - mean) ** 2, 0);
@@ -77,8 +83,11 @@ export function testForDecay(
     Math.sqrt((gain * Math.max(trend.dof, 1)) / curveRss),
     Math.max(trend.dof, 1),
   );
-  if (firstOrderDecays && curveTail < CURVE_LEVEL) return { ...result, outcome: 'decays' };
-  return { ...result, outcome: tail > 1 - TREND_LEVEL ? 'rises' : 'flat' };
+  const curve = firstOrderDecays ? curveTail / CURVE_LEVEL : Infinity;
+  // Each test in units of its own level, so that the smallest one speaks for all.
+  const p = Math.min(DECAY_LEVEL * Math.min(tail / TREND_LEVEL, plain, curve), 1);
+  const outcome = p < DECAY_LEVEL ? 'decays' : tail > 1 - TREND_LEVEL ? 'rises' : 'flat';
+  return { ...result, outcome, p, trendTail: tail };
 }
 
 function relativeFall(mode: ReadingMode, fall: number, first: number, unit: number): number | null {

@@ -243,6 +243,18 @@ describe('warnings', () => {
     });
     expect(analyse([...wells({ order: 1 }), ...blank]).warnings).toContain('blank-reacts');
   });
+  it('but neither a blank far slower than the catalyst, nor blanks that do not react', () => {
+    const blanks = (conversion: number, seed: number) =>
+      wells({ order: 1, conversion, with: { role: 'blank', catalyst: null } }, seed).map(
+        (well, i) => ({ ...well, id: `b${i}` }),
+      );
+    const slow = analyse([...wells({ order: 1 }), ...blanks(0.05, 5)]);
+    expect(slow.warnings).not.toContain('blank-reacts');
+    const alarms = Array.from({ length: 200 }, (_, i) =>
+      analyse([...wells({ order: 1, conversion: 0.3 }), ...blanks(1e-9, 100 + i)]),
+    ).filter((one) => one.warnings.includes('blank-reacts')).length;
+    expect(alarms).toBeLessThanOrEqual(8);
+  });
   it('loadings unknown, or known for some wells only', () => {
     expect(analyse(wells({ order: 1, with: { loadingGPerL: null } })).warnings).toContain(
       'loading-unknown',
@@ -274,6 +286,20 @@ describe('forced, dead and unusable catalysts', () => {
     expect(result.verdict).toBe('no-reaction');
     expect(result.kRef).toBeNull();
     expect(result.warnings).toContain('no-reacting-wells');
+  });
+  it('a dead catalyst of eight wells is told from its noise in at least 96 of 100 cases', () => {
+    const dead = Array.from({ length: 400 }, (_, i) =>
+      analyse(wells({ order: 1, conversion: 1e-9, noise: 0.02 }, 1000 + i)),
+    );
+    const kept = dead.filter((one) => one.verdict === 'no-reaction').length;
+    expect(kept / dead.length).toBeGreaterThanOrEqual(0.96);
+  });
+  it('a slow catalyst that each well barely shows is not taken for dead', () => {
+    const slow = Array.from({ length: 100 }, (_, i) =>
+      analyse(wells({ order: 1, conversion: 0.04, noise: 0.02 }, 2000 + i)),
+    );
+    const lost = slow.filter((one) => one.verdict === 'no-reaction').length;
+    expect(lost / slow.length).toBeLessThan(0.1);
   });
   it('no usable well is unusable', () => {
     const result = analyse(wells({ order: 1, with: { timesS: [], values: [] } }));
