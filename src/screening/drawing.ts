@@ -1,3 +1,4 @@
+import { rateUnit } from '../kinetics/rateLaws/rateConstantUnit';
 import { evaluateArrhenius, evaluateFit } from '../kinetics/curves';
 import type { CatalystAnalysis, RateLawName, SeriesAnalysis } from '../kinetics/types';
 
@@ -77,6 +78,7 @@ export function drawnArrhenius(result: CatalystAnalysis): DrawnArrhenius | null 
       temperatureK: point.temperatureK,
     })),
     line: { x, y: curve.values, low: curve.low, high: curve.high },
-    yUnit: result.kUnit ?? '',
+    // Where k has no unit the relative rate stands for it; without a law it is initial rates.
+    yUnit: result.basis === 'law' ? (result.kUnit ?? 's^-1') : rateUnit(result.dimension),
   };
 }

@@ -1,5 +1,4 @@
 import type { CandidateView } from '../../contracts/candidate';
-import { rateUnit } from '../../kinetics/rateLaws/rateConstantUnit';
 import type { ArrheniusPlot } from '../charts/buildArrheniusOption';
 import { temperatureTints } from '../temperatureTints';
 import { printedUnit } from './figures';
@@ -12,8 +11,6 @@ export function arrheniusPlotOf(
   if (!arrhenius || arrhenius.points.length === 0) return null;
   const wellOf = new Map(wells.map((well) => [well.wellId, well]));
   const colourOf = temperatureTints(wells.map(({ temperatureK }) => temperatureK));
-  // Initial rates have the unit of a rate, whatever law was asked for.
-  const yUnit = result.basis === 'law' ? arrhenius.yUnit : rateUnit(result.dimension);
   const symbol = result.basis === 'law' ? 'k' : 'r₀';
   return {
     points: arrhenius.points.map((point) => {
@@ -26,7 +23,7 @@ export function arrheniusPlotOf(
       };
     }),
     line: arrhenius.line,
-    yName: `ln (${symbol} / ${printedUnit(yUnit)})`,
+    yName: `ln (${symbol} / ${printedUnit(arrhenius.yUnit)})`,
     selectedWellId,
   };
 }
