@@ -54,7 +54,9 @@ const WARNINGS: Record<WarningCode, string> = {
     'The reference concentration lies outside the measured range, where the order may differ; start a well from there.',
   'few-wells': 'A single reacting well decides; repeat it before trusting the order.',
   'no-reacting-wells':
-    'None of the wells shows a reaction; raise temperature, loading or time if activity was expected.',
+    'The wells taken together show no reaction beyond their noise; raise temperature, loading or time if activity was expected.',
+  'reacts-only-together':
+    'All wells together show a slow reaction, but none by itself, so no rate can be given; raise temperature, loading or time to measure it.',
 };
 
 /** The sentence for a warning. */
@@ -88,7 +90,9 @@ function adviseUndetermined(
   conversion: number | null,
   warnings: readonly WarningCode[],
 ): string {
-  if (warnings.includes('too-few-for-order')) return WARNINGS['too-few-for-order'];
+  for (const code of ['reacts-only-together', 'too-few-for-order'] as const) {
+    if (warnings.includes(code)) return WARNINGS[code];
+  }
   const advice =
     conversion !== null && conversion < 0.7
       ? `: only ${percent(Math.max(conversion, 0))} was converted. Run to 70 % or more.`

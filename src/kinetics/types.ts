@@ -133,7 +133,8 @@ export type WarningCode =
   | 'extrapolated-temperature'
   | 'extrapolated-concentration'
   | 'few-wells'
-  | 'no-reacting-wells';
+  | 'no-reacting-wells'
+  | 'reacts-only-together';
 
 /** The engine's answer for one well. Serialisable: no NaN, no undefined. */
 export interface SeriesAnalysis {

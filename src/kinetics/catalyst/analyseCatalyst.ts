@@ -1,5 +1,5 @@
 import type { AnalysedWell } from '../analyseWell';
-import { rateLawOf } from '../rateLaws/registry';
+import { rateLawOf, requestedRateLaw } from '../rateLaws/registry';
 import type { RateLaw } from '../rateLaws/rateLaw';
 import type {
   CatalystAnalysis,
@@ -50,9 +50,8 @@ export function analyseCatalyst(
   const usable = wells.filter((well) => well.analysis.verdict !== 'unusable');
   const dimension = (usable[0] ?? wells[0])?.analysis.dimension ?? 'concentration';
   const same = usable.filter((well) => well.analysis.dimension === dimension);
-  const reacting = anyDecay(same)
-    ? same.filter((well) => well.analysis.verdict !== 'no-reaction')
-    : [];
+  const decays = anyDecay(same);
+  const reacting = decays ? same.filter((well) => well.analysis.verdict !== 'no-reaction') : [];
   const loading = poolLoading(
     reacting.map((well) => well.series.loadingGPerL),
     reference.loadingGPerL,
@@ -62,7 +61,7 @@ export function analyseCatalyst(
     return factor === null ? [] : [{ ...well, factor }];
   });
   const warnings: WarningCode[] = [];
-  const decided = decide(wells, pooled, warnings);
+  const decided = decide(wells, pooled, decays, warnings);
   const law = decided.law;
 
   let basis = NOTHING;
@@ -105,15 +104,20 @@ export function analyseCatalyst(
 function decide(
   wells: readonly AnalysedWell[],
   pooled: readonly PooledWell[],
+  decays: boolean,
   warnings: WarningCode[],
 ): { verdict: Verdict; law: RateLaw | null; weights: PooledVerdict['weights'] } {
   const forced = sharedRequest(wells.map((well) => well.series.law));
   if (forced === 'mixed') warnings.push('mixed-forced-laws');
   if (wells.every((well) => well.analysis.verdict === 'unusable')) {
-    warnings.push('too-few-readings');
+    warnings.push(...wells.flatMap((well) => well.analysis.warnings.filter(saysUnusable)));
     return { verdict: 'unusable', law: null, weights: {} };
   }
   if (pooled.length === 0) {
+    if (decays && (forced === null || forced === 'mixed')) {
+      warnings.push('reacts-only-together');
+      return { verdict: 'undetermined', law: null, weights: {} };
+    }
     warnings.push('no-reacting-wells');
     return { verdict: 'no-reaction', law: null, weights: {} };
   }
@@ -129,9 +133,18 @@ function decide(
   return { verdict: 'forced', law, weights: joint.weights };
 }
 
+const saysUnusable = (code: WarningCode) =>
+  code === 'too-few-readings' || code === 'too-few-distinct-times';
+
 /** The law that every well forces; null when none does, `mixed` when they disagree. */
 function sharedRequest(requests: readonly LawRequest[]): LawRequest | null | 'mixed' {
-  const keys = new Set(requests.map((request) => JSON.stringify(request)));
+  // First order and order 1 are one law, however they are asked for.
+  const keys = new Set(
+    requests.map((request) => {
+      const law = requestedRateLaw(request);
+      return law === null ? 'auto' : `${law.name} ${law.order}`;
+    }),
+  );
   if (keys.size > 1) return 'mixed';
   return requests[0] === undefined || requests[0] === 'auto' ? null : requests[0];
 }

@@ -9,7 +9,8 @@ const NOTABLE_SHARE = 0.05;
 /**
  * Whether what goes on without the catalyst matters to its rates: the blanks react, taken together,
  * and one of them is faster than 5 % of the catalyst's wells at its temperature. Rates are those of
- * the first reading, per volume.
+ * the first reading, per volume; signals, whose scale differs from well to well, are compared by
+ * their rates relative to the first reading.
  *
  * @param blanks of the screen, all kinds
  * @param wells the catalyst's reacting wells
@@ -19,17 +20,25 @@ export function blanksReact(
   wells: readonly AnalysedWell[],
 ): boolean {
   if (!anyDecay(blanks)) return false;
-  return blanks.some(({ analysis, decay }) => {
-    const reacts = analysis.verdict !== 'no-reaction' && analysis.verdict !== 'unusable';
-    if (decay === null || !reacts || analysis.initialRate === null) return false;
-    const near = wells.flatMap((well) => {
-      const rate = well.analysis.initialRate?.value;
-      const apart = Math.abs(well.series.temperatureK - analysis.temperatureK);
-      const same = well.analysis.dimension === analysis.dimension;
-      return rate !== undefined && same && apart <= NEAR_K ? [rate] : [];
-    });
-    if (near.length === 0) return false;
-    const mean = near.reduce((sum, rate) => sum + rate, 0) / near.length;
-    return analysis.initialRate.value > NOTABLE_SHARE * mean;
+  return blanks.some((blank) => {
+    const { verdict, dimension, temperatureK } = blank.analysis;
+    if (verdict === 'no-reaction' || verdict === 'unusable') return false;
+    const near = wells.filter(
+      ({ analysis }) =>
+        analysis.dimension === dimension &&
+        Math.abs(analysis.temperatureK - temperatureK) <= NEAR_K,
+    );
+    const relative = [blank, ...near].some(({ series }) => series.kind === 'signal');
+    const rates = near.map((well) => rateOf(well, relative)).filter((rate) => rate !== null);
+    const own = rateOf(blank, relative);
+    if (own === null || rates.length === 0) return false;
+    const mean = rates.reduce((sum, rate) => sum + rate, 0) / rates.length;
+    return own > NOTABLE_SHARE * mean;
   });
+}
+
+function rateOf({ analysis, firstConcentration: c }: AnalysedWell, relative: boolean) {
+  const rate = analysis.initialRate?.value ?? null;
+  if (!relative || rate === null) return rate;
+  return c !== null && c > 0 ? rate / c : null;
 }

@@ -30,9 +30,11 @@ export const DECAY_LEVEL = 0.02;
 const TREND_LEVEL = 0.009;
 const CURVE_LEVEL = 0.0012;
 
-/** A fall this large is a reaction already at the plain level, whatever few readings can prove. */
+/** A fall this large is a reaction already at the plain level, where readings are too few to prove it. */
 const PLAIN_CONVERSION = 0.3;
 const PLAIN_LEVEL = 0.1;
+/** Degrees of freedom of the line, up to which readings are that few. */
+const PLAIN_DOF = 2;
 
 const ROUNDING = 1e-14;
 
@@ -73,7 +75,8 @@ export function testForDecay(
   const span = times[times.length - 1]! - times[0]!;
   const se = Math.max(trend.slopeSe ?? Infinity, ROUNDING / span);
   const tail = studentTUpperTail((direction * trend.slope) / se, Math.max(trend.dof, 1));
-  const plain = (result.conversion ?? 0) >= PLAIN_CONVERSION ? tail / PLAIN_LEVEL : Infinity;
+  const large = trend.dof <= PLAIN_DOF && (result.conversion ?? 0) >= PLAIN_CONVERSION;
+  const plain = large ? tail / PLAIN_LEVEL : Infinity;
 
   const mean = y.reduce((sum, value) => sum + value / y.length, 0);
   const flatRss = y.reduce((sum, value) => sum + (value - mean) ** 2, 0);

@@ -69,7 +69,7 @@ describe('sentences', () => {
     expect(saidOf({ verdict: 'saturating' })).toContain('Saturating');
     expect(saidOf({ verdict: 'forced', order: 0 })).toContain('Zero order by choice');
     expect(saidOf({ verdict: 'other', warnings: [] })).toContain('no simple order');
-    expect(saidOf({ verdict: 'no-reaction' })).toContain('None of the wells');
+    expect(saidOf({ verdict: 'no-reaction' })).toContain('wells taken together');
     expect(saidOf({ verdict: 'unusable' })).toContain('None of its wells');
   });
 });
