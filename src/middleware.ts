@@ -92,7 +92,11 @@ export const onRequest: MiddlewareHandler = async (context, next) => {
   context.locals.viewer = null;
   try {
     if (!mayChange(context.request.method, context.request.headers, origin)) {
-      throw problems.foreignOrigin();
+      // A script that forgot its token is told so; a sign-in form has to come from our own page.
+      const nobody = isApi(pathname) && !context.request.headers.has('cookie');
+      throw nobody && !isSignInMachinery(pathname)
+        ? problems.notSignedIn()
+        : problems.foreignOrigin();
     }
     if (isSignInMachinery(pathname)) return await next();
     context.locals.viewer = await identify(context);

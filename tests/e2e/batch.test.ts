@@ -148,5 +148,7 @@ describe('the batch endpoint', () => {
     const wrong = callerWith({ authorization: `Bearer ${token}0`, origin: '' });
     expect((await send({ series: [] }, wrong)).status).toBe(401);
     expect((await send({ series: [] }, callerWith({}))).status).toBe(401);
+    const bare = await fetch(new URL('/api/v1/analyse', baseUrl), { method: 'POST', body: '{}' });
+    expect(bare.status).toBe(401);
   });
 });
