@@ -1,4 +1,8 @@
 import type { DecaySeries, ReadingDimension } from '../types';
+import { MODE } from './problem';
+
+/** s; times closer than this are one time: the squares of shorter spans are 0 in a double. */
+const SAME_TIME_S = 1e-100;
 
 /** The usable readings of a well, sorted by time. */
 export interface Readings {
@@ -10,6 +14,7 @@ export interface Readings {
   indices: number[];
   excluded: number;
   unsorted: boolean;
+  /** Product and conversion begin at time 0: all times up to 0 are one. */
   distinctTimes: number;
 }
 
@@ -41,8 +46,19 @@ export function collectReadings(series: DecaySeries): Readings {
     indices,
     excluded: timesS.length - indices.length,
     unsorted,
-    distinctTimes: times.filter((time, i) => i === 0 || time !== times[i - 1]).length,
+    distinctTimes: countDistinct(times, MODE[series.kind] === 'decay' ? -Infinity : 0),
   };
+}
+
+function countDistinct(ascending: readonly number[], begin: number): number {
+  let [count, last] = [0, -Infinity];
+  for (const time of ascending) {
+    const since = Math.max(time, begin);
+    if (since - last <= SAME_TIME_S) continue;
+    count += 1;
+    last = since;
+  }
+  return count;
 }
 
 /**
