@@ -1,5 +1,6 @@
 import { analyseWell, type AnalysedWell } from './analyseWell';
 import { analyseCatalyst } from './catalyst/analyseCatalyst';
+import { blankRates } from './catalyst/blanksReact';
 import { ENGINE_VERSION } from './constants';
 import type { DecaySeries, ReferenceConditions, ScreenAnalysis, WellRole } from './types';
 
@@ -22,7 +23,7 @@ export function analyseScreen(
     onProgress?.(i + 1, series.length);
     return well;
   });
-  const blanks = wells.filter((well) => BLANK.includes(well.series.role));
+  const blanks = blankRates(wells.filter((well) => BLANK.includes(well.series.role)));
   const byCatalyst = new Map<string, AnalysedWell[]>();
   for (const well of wells) {
     const { catalyst, role } = well.series;

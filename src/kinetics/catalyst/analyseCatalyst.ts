@@ -10,7 +10,7 @@ import type {
   Verdict,
   WarningCode,
 } from '../types';
-import { blanksReact } from './blanksReact';
+import { blanksReact, type BlankRate } from './blanksReact';
 import { describeByInitialRate } from './initialRateBasis';
 import { anyDecay } from './jointDecay';
 import { describeByLaw } from './lawBasis';
@@ -39,13 +39,13 @@ const NOTHING: BasisResult = {
  *
  * @param wells its samples (or benchmarks), at least one; wells whose results have another
  *   dimension than the first usable one's are left out
- * @param blanks wells without the catalyst, anywhere in the screen
+ * @param blanks what reacts without the catalyst, anywhere in the screen
  */
 export function analyseCatalyst(
   catalyst: string,
   wells: readonly AnalysedWell[],
   reference: ReferenceConditions,
-  blanks: readonly AnalysedWell[] = [],
+  blanks: readonly BlankRate[] = [],
 ): CatalystAnalysis {
   const usable = wells.filter((well) => well.analysis.verdict !== 'unusable');
   const dimension = (usable[0] ?? wells[0])?.analysis.dimension ?? 'concentration';

@@ -67,7 +67,7 @@ export function testForDecay(
     dof: trend.dof,
     conversion: relativeFall(mode, fall, first, unit),
   };
-  if (Math.abs(Math.max(...y) - Math.min(...y)) <= ROUNDING) {
+  if (y.every((value) => Math.abs(value - y[0]!) <= ROUNDING)) {
     return { ...result, outcome: 'flat', p: 1, trendTail: 0.5 };
   }
 

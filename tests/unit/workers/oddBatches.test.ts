@@ -81,3 +81,25 @@ describe('batches of numbers that no laboratory has', () => {
     }
   });
 });
+
+describe('a single very long series', () => {
+  it('is answered as any other', () => {
+    const n = 130_000;
+    const time = Array.from({ length: n }, (_, i) => i);
+    const values = time.map((i) => 10 * Math.exp((-2 * i) / n) + 0.1 * Math.sin(9.7 * i));
+    const series = {
+      id: 'long',
+      catalyst: 'X',
+      temperature: { value: 40, unit: 'degC' },
+      time: { values: time, unit: 's' },
+      reading: { values, unit: 'mmol/L' },
+    };
+    const { status, body } = answerBatch(
+      new TextEncoder().encode(JSON.stringify({ series: [series] })),
+    );
+    expect(status).toBe(200);
+    const answer = JSON.parse(new TextDecoder().decode(body)) as BatchResponse;
+    expect(answer.series[0]!.verdict).toBe('first');
+    expect(answer.series[0]!.points.used).toBe(n);
+  });
+});
