@@ -1,4 +1,5 @@
 import type { AnalysedWell } from '../analyseWell';
+import { chanceGain, oneSidedGain } from '../statistics/chanceGain';
 import { akaikeWeights } from '../statistics/goodnessOfFit';
 import type { RateLawName, WarningCode } from '../types';
 import { selectRateLaw, type Evidence, type FreeOrder } from '../verdict/selectRateLaw';
@@ -19,18 +20,24 @@ const SHARE_MISSING = 0.1;
 
 type JudgedWell = AnalysedWell & { evidence: Evidence };
 
-/** Mean and variance of what one needless parameter gains in −2 ln L: χ² with one degree. */
-const FREE = { mean: 1, variance: 2 };
-/** The same for a parameter that must not be negative: half of the time nothing. */
-const ONE_SIDED = { mean: 0.5, variance: 1.25 };
-
 /**
  * Charge for a rival whose extra parameter the wells would share although each well fits its own:
  * the parameter itself, what fitting it per well gains by chance, and twice the spread of that.
  * AICc well by well would charge so much that departures seen in every well went unnoticed.
+ *
+ * @param oneSided true for a parameter that must not be negative
  */
-function sharedCharge(gain: typeof FREE, wells: number): number {
-  return 2 + gain.mean * wells + 2 * Math.sqrt(gain.variance * wells);
+function sharedCharge(wells: readonly JudgedWell[], oneSided: boolean): number {
+  let [mean, variance] = [0, 0];
+  for (const { analysis, series } of wells) {
+    const n = analysis.pointsUsed;
+    // C0 is no parameter of a conversion; k and the extra one always are.
+    const gain = chanceGain(n, Math.max(n - (series.kind === 'conversion' ? 2 : 3), 1));
+    const own = oneSided ? oneSidedGain(gain) : gain;
+    mean += own.mean;
+    variance += own.variance;
+  }
+  return 2 + mean + 2 * Math.sqrt(variance);
 }
 
 /** Sum of the wells' AICc: each well has its own k, C0 and noise, all share the law. */
@@ -51,7 +58,7 @@ function sumEvidence(wells: readonly JudgedWell[]): Evidence {
     }, 0);
     const charge = Math.min(
       own.reduce((sum, { evidence }) => sum + evidence.rivalCharge, 0),
-      sharedCharge(name === 'order' ? FREE : ONE_SIDED, own.length),
+      sharedCharge(own, name !== 'order'),
     );
     rivals[name] = best.aicc - gain + charge;
   }
