@@ -210,6 +210,12 @@ describe('sizes', () => {
       { path: '/series', message: expect.stringContaining('20,000') as string },
     ]);
   });
+  it('20,000 series and 2,000,000 readings are not', () => {
+    expect(problemOf({ series: new Array(MOST_SERIES).fill(null) }).status).toBe(422);
+    const values = new Array(MOST_READINGS / 2).fill(1);
+    const half = { reading: { values }, time: { values } };
+    expect(problemOf({ series: [half, half] }).status).toBe(422);
+  });
   it('more readings than 2,000,000 are too large', () => {
     const values = new Array(MOST_READINGS / 2 + 1).fill(1);
     const half = { reading: { values }, time: { values } };
