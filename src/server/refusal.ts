@@ -42,7 +42,7 @@ export const refusals = {
 } as const;
 
 /** How much of a refused body is still read, so that its sender gets to read the refusal. */
-const drainedBytes = 64 * 1024 * 1024;
+const drainedBytes = 128 * 1024 * 1024;
 const drainedMs = 10_000;
 
 /** Answers with an RFC 9457 problem body and lets the connection go once it was read. */

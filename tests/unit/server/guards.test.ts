@@ -68,7 +68,7 @@ describe('setForwarded', () => {
 describe('bodyLimit', () => {
   it('takes a large body only where one is expected', () => {
     const mb = 1024 * 1024;
-    expect(bodyLimit('POST', '/api/v1/analyse')).toBe(64 * mb);
+    expect(bodyLimit('POST', '/api/v1/analyse')).toBe(128 * mb);
     expect(bodyLimit('POST', '/api/v1/screens')).toBe(33 * mb);
     expect(bodyLimit('PUT', '/api/v1/analyse')).toBe(mb);
     expect(bodyLimit('POST', '/api/v1/screens/x/analyses')).toBe(mb);
