@@ -70,6 +70,10 @@ export async function analyseScreen(
       at: now,
     });
   });
-  services.runner.enqueue({ id, groupId, screenId, settings });
-  return loadAnalysis(services.db, viewer, id);
+  // The answer is what was stored, not whatever the run has come to by then.
+  try {
+    return await loadAnalysis(services.db, viewer, id);
+  } finally {
+    services.runner.enqueue({ id, groupId, screenId, settings });
+  }
 }
