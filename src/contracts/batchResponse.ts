@@ -1,4 +1,4 @@
-import { baseUnit, rateUnit } from '../kinetics/rateLaws/rateConstantUnit';
+import { baseUnit, rateUnit, reciprocalUnit } from '../kinetics/rateLaws/rateConstantUnit';
 import type {
   CatalystAnalysis,
   Estimate,
@@ -28,7 +28,11 @@ type WithErrorAndLimits = WithError & WithLimits;
 export type BatchFit = Pick<
   LawFit,
   'k' | 'kSe' | 'kRel' | 'kRelSe' | 'c0' | 'c0Se' | 'rss' | 'aicc' | 'weight'
->;
+> & {
+  /** Adsorption constant; only with the saturating law. */
+  K?: number | null;
+  KSe?: number | null;
+};
 
 export interface BatchSeriesResult {
   id: string;
@@ -101,8 +105,10 @@ function inKilojoules(estimate: Estimate | null): WithErrorAndLimits | null {
   };
 }
 
-function fitOf({ k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight }: LawFit): BatchFit {
-  return { k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight };
+function fitOf(fit: LawFit): BatchFit {
+  const { k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight, saturation } = fit;
+  const own = { k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight };
+  return saturation === null ? own : { ...own, K: saturation.K, KSe: saturation.KSe };
 }
 
 function fitsOf(fits: SeriesAnalysis['fits']): BatchSeriesResult['fits'] {
@@ -119,7 +125,7 @@ function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
     law: analysis.law,
     k: withBoth(analysis.k, analysis.kUnit),
     kRel: withError(analysis.kRel, 's^-1'),
-    K: null,
+    K: withError(analysis.adsorptionConstant, reciprocalUnit(dimension)),
     c0: withError(analysis.c0, baseUnit(dimension)),
     net: null,
     conversion: analysis.conversion,

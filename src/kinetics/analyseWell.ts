@@ -1,13 +1,12 @@
-import { residualsOf } from './fitting/fitLaw';
 import type { Readings } from './fitting/readings';
 import { collectReadings, resultDimension } from './fitting/readings';
-import { requestedRateLaw } from './rateLaws/registry';
+import { requestedLaw } from './rateLaws/registry';
 import { estimate, finiteOrNull } from './statistics/estimate';
 import { intervalFactor } from './statistics/tDistribution';
 import type { DecaySeries, Estimate, SeriesAnalysis, WarningCode } from './types';
 import { averageInitialRate } from './verdict/averageInitialRate';
 import { testForDecay, type DecayTest } from './verdict/decayTest';
-import { fitWell, type FittedLaw, type WellFits } from './verdict/fitWell';
+import { fitWell, type WeighedLaw, type WellFits } from './verdict/fitWell';
 import { testLackOfFit } from './verdict/lackOfFit';
 import { findOutliers } from './verdict/outliers';
 import {
@@ -40,13 +39,13 @@ const WIDEST_ORDER = 5;
  * Analyses one well: fits, verdict, rate constant and initial rate.
  *
  * @throws RangeError when times and values differ in length, the temperature is not above 0 K, or
- *   the forced law is not held by this engine
+ *   a forced order is out of range
  */
 export function analyseWell(series: DecaySeries): AnalysedWell {
   if (!(series.temperatureK > 0)) {
     throw new RangeError(`temperatureK must be above 0, got ${series.temperatureK}`);
   }
-  const forced = requestedRateLaw(series.law);
+  const forced = requestedLaw(series.law);
   const readings = collectReadings(series);
   const blank = emptyAnalysis(series, readings);
   const few = readings.values.length < FEWEST_READINGS;
@@ -63,12 +62,12 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   }
 
   const fits = fitWell(series, readings, forced);
-  const first = fits.laws.find((fitted) => fitted.law.order === 1)!;
+  const first = fits.laws.find((fitted) => fitted.order === 1)!;
   const decay = testForDecay(
     readings,
     series.kind,
-    first.relative.rss,
-    first.relative.kRel === null || first.relative.kRel > 0,
+    first.relative!.rss,
+    first.relative!.kRel === null || first.relative!.kRel > 0,
   );
   if (decay.outcome !== 'decays') return describeDeadWell(series, readings, blank, fits, decay);
 
@@ -77,16 +76,13 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
       ? {
           verdict: 'undetermined',
           order: null,
-          best: bestOf(fits).law.name,
+          law: null,
+          best: bestOf(fits).name,
           warnings: ['too-few-for-order'],
         }
       : selectRateLaw(fits.evidence, fits.apparentOrder);
-  const asserted =
-    forced ??
-    (selection.order === null
-      ? null
-      : (fits.laws.find((fitted) => fitted.law.name === selection.verdict)?.law ?? null));
-  const shown = fits.laws.find((fitted) => fitted.law === asserted) ?? bestOf(fits);
+  const asserted = forced?.name ?? selection.law;
+  const shown = fits.laws.find((fitted) => fitted.name === asserted) ?? bestOf(fits);
   const analysis = describeReactingWell(series, readings, blank, fits, selection, shown);
   return {
     series,
@@ -98,7 +94,7 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   };
 }
 
-function bestOf(fits: WellFits): FittedLaw {
+function bestOf(fits: WellFits): WeighedLaw {
   return fits.laws.reduce((best, fitted) => (fitted.criterion < best.criterion ? fitted : best));
 }
 
@@ -119,6 +115,7 @@ function emptyAnalysis(series: DecaySeries, readings: Readings): SeriesAnalysis 
     k: null,
     kUnit: null,
     kRel: null,
+    adsorptionConstant: null,
     c0: null,
     conversion: null,
     initialRate: null,
@@ -142,7 +139,7 @@ function describeDeadWell(
   fits: WellFits,
   decay: DecayTest,
 ): AnalysedWell {
-  const zero = fits.laws.find((fitted) => fitted.law.order === 0)!;
+  const zero = fits.laws.find((fitted) => fitted.order === 0)!;
   const perReading =
     series.kind === 'product'
       ? 1 / series.productPerReactant
@@ -159,8 +156,8 @@ function describeDeadWell(
     fits: fits.byName,
     shownLaw: 'zero',
     residualSd: zero.fit.residualSd,
-    lackOfFit: testLackOfFit(residualsOf(zero.relative), zero.relative.problem.valueScale),
-    outliers: findOutliers(zero.relative, readings.indices),
+    lackOfFit: testLackOfFit(zero.residuals(), fits.unit),
+    outliers: findOutliers(zero, fits.unit, readings.indices),
     warnings: [...blank.warnings],
   };
   if (decay.outcome === 'rises') analysis.warnings.push('rising');
@@ -181,13 +178,13 @@ function describeReactingWell(
   blank: SeriesAnalysis,
   fits: WellFits,
   selection: Selection,
-  shown: FittedLaw,
+  shown: WeighedLaw,
 ): SeriesAnalysis {
   const isForced = series.law !== 'auto';
-  const lackOfFit = testLackOfFit(residualsOf(shown.relative), shown.relative.problem.valueScale);
-  const misses = !isForced && selection.order !== null && lackOfFit.significant;
-  const isAsserted = isForced || (selection.order !== null && !misses);
-  const { fit, law, initialRate } = shown;
+  const lackOfFit = testLackOfFit(shown.residuals(), fits.unit);
+  const misses = !isForced && selection.law !== null && lackOfFit.significant;
+  const isAsserted = isForced || (selection.law !== null && !misses);
+  const { fit, initialRate } = shown;
   const warnings: WarningCode[] = [...blank.warnings];
   if (!isForced) warnings.push(...selection.warnings);
   if (misses) warnings.push('no-simple-order');
@@ -203,19 +200,23 @@ function describeReactingWell(
     warnings.push('initial-concentration-needed');
   }
   if (fits.exact) warnings.push('exact-fit');
-  const outliers = findOutliers(shown.relative, readings.indices);
+  const outliers = findOutliers(shown, fits.unit, readings.indices);
   if (outliers.length > 0) warnings.push('outlier');
 
   const rates = fits.laws
-    .filter((fitted) => fitted.law.name !== 'order')
+    .filter((fitted) => fitted.name !== 'order')
     .map((fitted) => ({ ...fitted.initialRate, criterion: fitted.criterion }));
   const k = isAsserted ? estimate(fit.k, fit.kSe, fit.dof) : null;
   return {
     ...blank,
     verdict: isForced ? 'forced' : misses ? 'other' : selection.verdict,
-    order: isAsserted ? law.order : null,
+    order: isAsserted ? shown.order : null,
     k,
-    kUnit: k === null ? null : law.kUnit(blank.dimension),
+    kUnit: k === null ? null : shown.kUnit(blank.dimension),
+    adsorptionConstant:
+      isAsserted && fit.saturation !== null
+        ? estimate(fit.saturation.K, fit.saturation.KSe, fit.dof)
+        : null,
     kRel: isAsserted ? estimate(fit.kRel, fit.kRelSe, fit.dof) : null,
     c0: estimate(fit.c0, fit.c0Se, fit.dof),
     conversion: shown.conversion,
@@ -224,7 +225,7 @@ function describeReactingWell(
       : averageInitialRate(rates, fit.dof),
     apparentOrder: freeOrderEstimate(fits.apparentOrder),
     fits: fits.byName,
-    shownLaw: law.name,
+    shownLaw: shown.name,
     residualSd: finiteOrNull(fit.residualSd),
     lackOfFit,
     outliers,

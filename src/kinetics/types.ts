@@ -69,6 +69,18 @@ export interface Estimate {
   high: number | null;
 }
 
+/** What only the saturating law has, at the fit's `originS`. */
+export interface SaturatingConstants {
+  /** Adsorption constant, reciprocal base unit; null at a limit of the law. */
+  K: number | null;
+  KSe: number | null;
+  /** σ = K C0/(1 + K C0): 0 is first order, 1 zero order. */
+  coverage: number;
+  coverageSe: number | null;
+  /** Of (c0, kRel, coverage), row by row; null at a limit of the law. */
+  covariance: number[] | null;
+}
+
 /** One law fitted to one well. All keys are always present; what does not exist is null. */
 export interface LawFit {
   /** In the law's own unit (see `rateConstantUnit`). Null where the readings cannot give it. */
@@ -95,6 +107,8 @@ export interface LawFit {
   /** sqrt(rss/dof), the reading's base unit; null when dof < 1. */
   residualSd: number | null;
   dof: number;
+  /** Null for every law but the saturating one. */
+  saturation: SaturatingConstants | null;
 }
 
 /** Evidence that the best law still misses the readings. */
@@ -157,6 +171,8 @@ export interface SeriesAnalysis {
   kUnit: string | null;
   /** s⁻¹. */
   kRel: Estimate | null;
+  /** Adsorption constant of the saturating law, reciprocal base unit. */
+  adsorptionConstant: Estimate | null;
   /** Base unit. */
   c0: Estimate | null;
   /** 1 − C_fit(t_last)/C_fit(t_first), not clamped; null when unusable. */
@@ -220,6 +236,15 @@ export interface ArrheniusLine {
   points: ArrheniusPoint[];
 }
 
+/** How strongly a saturating catalyst holds the reactant. */
+export interface Adsorption {
+  /** Adsorption constant at `temperatureK`, reciprocal base unit. */
+  K: Estimate;
+  temperatureK: number;
+  /** Apparent ΔH_ads, J/mol, from ln K = ln K_c − (ΔH_ads/R)(1/T − 1/T_c). */
+  enthalpy: Estimate | null;
+}
+
 /** The engine's answer for one catalyst over all its wells. */
 export interface CatalystAnalysis {
   catalyst: string;
@@ -245,6 +270,8 @@ export interface CatalystAnalysis {
   turnoverFrequency: Estimate | null;
   /** s. */
   timeToTarget: Estimate | null;
+  /** Null unless the saturating law holds and K is known. */
+  adsorption: Adsorption | null;
   /** True when rateRef and timeToTarget are brackets between orders 0 and 2. */
   bracket: boolean;
   /** g/L that k was brought to; null when per well. */

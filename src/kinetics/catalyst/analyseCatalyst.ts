@@ -1,11 +1,11 @@
 import type { AnalysedWell } from '../analyseWell';
-import { rateLawOf, requestedRateLaw } from '../rateLaws/registry';
-import type { RateLaw } from '../rateLaws/rateLaw';
+import { rateLawOf, requestedLaw } from '../rateLaws/registry';
 import type {
   CatalystAnalysis,
   LawFit,
   LawRequest,
   RateLawName,
+  ReadingDimension,
   ReferenceConditions,
   Verdict,
   WarningCode,
@@ -17,6 +17,7 @@ import { describeByLaw } from './lawBasis';
 import { poolEvidence, type PooledVerdict } from './poolEvidence';
 import { fitUnder, type BasisResult, type PooledWell } from './pooledWell';
 import { poolLoading } from './poolLoading';
+import { describeBySaturation } from './saturatingBasis';
 import { countTemperatures } from './temperatures';
 import { warnOfTemperatures } from './temperatureWarnings';
 
@@ -31,6 +32,7 @@ const NOTHING: BasisResult = {
   activationEnergy: null,
   initialRateActivationEnergy: null,
   lnA: null,
+  adsorption: null,
 };
 
 /**
@@ -62,15 +64,11 @@ export function analyseCatalyst(
   });
   const warnings: WarningCode[] = [];
   const decided = decide(wells, pooled, decays, warnings);
-  const law = decided.law;
 
   let basis = NOTHING;
   if (pooled.length > 0) {
     warnings.push(...loading.warnings);
-    basis =
-      law === null
-        ? describeByInitialRate(pooled, dimension, reference)
-        : describeByLaw(pooled, law, dimension, reference);
+    basis = describeBasis(decided, pooled, dimension, reference);
     warnings.push(...warnOfTemperatures(pooled, basis.arrhenius, reference));
     if (blanksReact(blanks, pooled)) warnings.push('blank-reacts');
   }
@@ -78,13 +76,13 @@ export function analyseCatalyst(
     basis.rateRef,
     dimension === 'concentration' ? loading.loadingGPerL : null,
   );
-  const fits = pooled.map((well) => fitUnder(well, law)).filter((fit) => fit !== null);
+  const fits = pooled.map((well) => fitUnder(well, decided.law)).filter((fit) => fit !== null);
   return {
     catalyst,
     dimension,
     verdict: decided.verdict,
-    order: law === null ? null : law.order,
-    basis: law === null ? 'initial-rate' : 'law',
+    order: decided.order,
+    basis: decided.law === null ? 'initial-rate' : 'law',
     ...basis,
     rateRefPerMass,
     turnoverFrequency: perSite(rateRefPerMass, pooled),
@@ -101,36 +99,63 @@ export function analyseCatalyst(
   };
 }
 
+/** What the wells come to: the law to rank by, if any. */
+interface Decided {
+  verdict: Verdict;
+  law: RateLawName | null;
+  /** Null for the saturating law. */
+  order: number | null;
+  weights: PooledVerdict['weights'];
+}
+
+const withoutLaw = (verdict: Verdict): Decided => ({
+  verdict,
+  law: null,
+  order: null,
+  weights: {},
+});
+
+function describeBasis(
+  { law, order }: Decided,
+  wells: readonly PooledWell[],
+  dimension: ReadingDimension,
+  reference: ReferenceConditions,
+): BasisResult {
+  if (law === 'saturating') return describeBySaturation(wells, dimension, reference);
+  const powerLaw = law === null ? null : rateLawOf(law, order);
+  return powerLaw === null
+    ? describeByInitialRate(wells, dimension, reference)
+    : describeByLaw(wells, powerLaw, dimension, reference);
+}
+
 function decide(
   wells: readonly AnalysedWell[],
   pooled: readonly PooledWell[],
   decays: boolean,
   warnings: WarningCode[],
-): { verdict: Verdict; law: RateLaw | null; weights: PooledVerdict['weights'] } {
+): Decided {
   const forced = sharedRequest(wells.map((well) => well.series.law));
   if (forced === 'mixed') warnings.push('mixed-forced-laws');
   if (wells.every((well) => well.analysis.verdict === 'unusable')) {
     warnings.push(...wells.flatMap((well) => well.analysis.warnings.filter(saysUnusable)));
-    return { verdict: 'unusable', law: null, weights: {} };
+    return withoutLaw('unusable');
   }
   if (pooled.length === 0) {
     if (decays && (forced === null || forced === 'mixed')) {
       warnings.push('reacts-only-together');
-      return { verdict: 'undetermined', law: null, weights: {} };
+      return withoutLaw('undetermined');
     }
     warnings.push('no-reacting-wells');
-    return { verdict: 'no-reaction', law: null, weights: {} };
+    return withoutLaw('no-reaction');
   }
   if (pooled.length < 2) warnings.push('few-wells');
   const joint = poolEvidence(pooled);
   if (forced === null || forced === 'mixed') {
     warnings.push(...joint.warnings);
-    const law = joint.order === null ? null : rateLawOf(joint.verdict as RateLawName, joint.order);
-    return { verdict: joint.verdict, law, weights: joint.weights };
+    return joint;
   }
-  const order = pooled[0]!.analysis.order;
-  const law = rateLawOf(pooled[0]!.analysis.shownLaw!, order);
-  return { verdict: 'forced', law, weights: joint.weights };
+  const { shownLaw, order } = pooled[0]!.analysis;
+  return { verdict: 'forced', law: shownLaw, order, weights: joint.weights };
 }
 
 const saysUnusable = (code: WarningCode) =>
@@ -141,8 +166,8 @@ function sharedRequest(requests: readonly LawRequest[]): LawRequest | null | 'mi
   // First order and order 1 are one law, however they are asked for.
   const keys = new Set(
     requests.map((request) => {
-      const law = requestedRateLaw(request);
-      return law === null ? 'auto' : `${law.name} ${law.order}`;
+      const asked = requestedLaw(request);
+      return asked === null ? 'auto' : `${asked.name} ${asked.law?.order}`;
     }),
   );
   if (keys.size > 1) return 'mixed';

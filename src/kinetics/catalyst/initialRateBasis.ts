@@ -55,6 +55,7 @@ export function describeByInitialRate(
     activationEnergy: null,
     initialRateActivationEnergy: line === null ? null : activationEnergyOf(line),
     lnA: null,
+    adsorption: null,
   };
 }
 

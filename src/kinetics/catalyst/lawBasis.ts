@@ -46,7 +46,7 @@ export function describeByLaw(
   reference: ReferenceConditions,
 ): BasisResult {
   const own = wells.flatMap((well) => {
-    const fit = fitUnder(well, law);
+    const fit = fitUnder(well, law.name);
     return fit === null ? [] : [{ well, fit }];
   });
   const kKnown = own.some(({ fit }) => fit.k !== null);
@@ -77,5 +77,6 @@ export function describeByLaw(
     activationEnergy: line === null ? null : activationEnergyOf(line),
     initialRateActivationEnergy: null,
     lnA: line === null || !kKnown ? null : lnPreExponentialOf(line),
+    adsorption: null,
   };
 }

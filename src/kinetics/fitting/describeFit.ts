@@ -23,7 +23,7 @@ const rootOrNull = (variance: number | null) =>
   variance !== null && variance >= 0 ? finiteOrNull(Math.sqrt(variance)) : null;
 
 /** C per unit of amplitude; null where readings do not carry the concentration. */
-function concentrationPerAmplitude(series: DecaySeries): number | null {
+export function concentrationPerAmplitude(series: DecaySeries): number | null {
   if (series.kind === 'product') return 1 / series.productPerReactant;
   if (series.kind === 'conversion') return series.initialConcentration;
   return 1;
@@ -46,6 +46,7 @@ export function describeFit(
     weight: null,
     residualSd: fit.dof > 0 ? finiteOrNull(Math.sqrt(fit.rss / fit.dof)) : null,
     dof: fit.dof,
+    saturation: null,
   };
   if (fit.growth !== null) return describeGrowth(fit.growth, fit, series, dimension, common);
 
@@ -104,7 +105,7 @@ function describeGrowth(
   fit: RelativeFit,
   series: DecaySeries,
   dimension: ReadingDimension,
-  common: Pick<LawFit, 'rss' | 'aicc' | 'weight' | 'residualSd' | 'dof'>,
+  common: Pick<LawFit, 'rss' | 'aicc' | 'weight' | 'residualSd' | 'dof' | 'saturation'>,
 ): DescribedFit {
   const rate = growth.slope / series.productPerReactant;
   const slopeSe = rootOrNull(growth.variance);

@@ -15,6 +15,8 @@ export interface SaturatingFit {
 }
 
 const MOST_STEPS = 60;
+/** Beyond these the law is its limit. */
+const LOWEST_COVERAGE = 1e-9;
 const HIGHEST_COVERAGE = 1 - 1e-9;
 const SMALL_STEP = 1e-6;
 const MOST_DAMPING = 1e12;
@@ -251,35 +253,63 @@ export function fitSaturating(
   return finish(problem, at);
 }
 
-function finish(problem: FitProblem, { kRel, coverage }: Place): SaturatingFit {
-  const { y, mode } = problem;
-  const n = y.length;
-  const [f, byRate, byCoverage] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
-  const sign = mode === 'decay' ? 1 : -1;
+/** The curve at an optimum with its derivatives by kRel and coverage, on the scaled readings. */
+function curveAt(problem: FitProblem, kRel: number, coverage: number) {
+  const n = problem.y.length;
+  const f = new Float64Array(n);
+  const byRate = new Float64Array(n);
+  const byCoverage = new Float64Array(n);
+  const growing = problem.mode !== 'decay';
+  const sign = growing ? -1 : 1;
   profileSums(problem, kRel, coverage, trial, (i, w, wr, ws) => {
-    f[i] = mode === 'decay' ? w : 1 - w;
+    f[i] = growing ? 1 - w : w;
     byRate[i] = sign * wr;
     byCoverage[i] = sign * ws;
   });
-  const amplitude = mode === 'fraction' ? 1 : trial.p / trial.q;
-  let [rss, rr, rs, ss, fr, fs] = [0, 0, 0, 0, 0, 0];
-  for (let i = 0; i < n; i += 1) {
+  const amplitude = problem.mode === 'fraction' ? 1 : trial.p / trial.q;
+  return { f, byRate, byCoverage, amplitude };
+}
+
+/** Readings less the curve, in the reading's base unit, in time order. */
+export function saturatingResiduals(problem: FitProblem, fit: SaturatingFit): number[] {
+  const { f } = curveAt(problem, fit.kRel, fit.coverage);
+  return Array.from(problem.y, (y, i) => (y - fit.amplitude * f[i]!) * problem.valueScale);
+}
+
+/** Diagonal of the hat matrix; null at a limit of the law. */
+export function saturatingLeverages(problem: FitProblem, fit: SaturatingFit): number[] | null {
+  const { inverse } = fit;
+  if (inverse === null) return null;
+  const { f, byRate, byCoverage } = curveAt(problem, fit.kRel, fit.coverage);
+  const fixed = problem.mode === 'fraction';
+  return Array.from(f, (value, i) => {
+    const row = [fixed ? 0 : value, fit.amplitude * byRate[i]!, fit.amplitude * byCoverage[i]!];
+    return row.reduce(
+      (sum, a, r) => sum + a * row.reduce((s, b, c) => s + b * inverse[3 * r + c]!, 0),
+      0,
+    );
+  });
+}
+
+function finish(problem: FitProblem, { kRel, coverage }: Place): SaturatingFit {
+  const { y, mode } = problem;
+  const { f, byRate, byCoverage, amplitude } = curveAt(problem, kRel, coverage);
+  let [rss, ff, rr, rs, ss, fr, fs] = [0, 0, 0, 0, 0, 0, 0];
+  for (let i = 0; i < y.length; i += 1) {
     const [r, s] = [amplitude * byRate[i]!, amplitude * byCoverage[i]!];
     rss += (y[i]! - amplitude * f[i]!) ** 2;
+    ff += f[i]! * f[i]!;
     rr += r * r;
     rs += r * s;
     ss += s * s;
     fr += f[i]! * r;
     fs += f[i]! * s;
   }
-  const limit = coverage <= 0 ? 'first' : coverage >= HIGHEST_COVERAGE ? 'zero' : null;
+  const limit = coverage < LOWEST_COVERAGE ? 'first' : coverage >= HIGHEST_COVERAGE ? 'zero' : null;
+  const fixed = mode === 'fraction';
   const inverse =
-    limit !== null
-      ? null
-      : mode === 'fraction'
-        ? invert(1, 0, 0, rr, rs, ss)
-        : invert(trial.q, fr, fs, rr, rs, ss);
-  if (inverse !== null && mode === 'fraction') inverse[0] = 0;
+    limit !== null ? null : fixed ? invert(1, 0, 0, rr, rs, ss) : invert(ff, fr, fs, rr, rs, ss);
+  if (inverse !== null && fixed) inverse[0] = 0;
   return { amplitude, kRel, coverage, rss, limit, inverse };
 }
 

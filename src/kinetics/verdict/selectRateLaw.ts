@@ -14,17 +14,21 @@ export interface LawEvidence {
 export interface Evidence {
   laws: LawEvidence[];
   /** AICc of the curves with one more parameter, by name; absent where readings are too few. */
-  rivals: Partial<Record<'order' | 'plateau' | 'deactivating', number>>;
+  rivals: Partial<Record<'order' | 'plateau' | 'deactivating' | 'saturating', number>>;
   /** What AICc charges a rival of this well for its extra parameter; 0 for pooled evidence. */
   rivalCharge: number;
+  /** Coverage σ of the saturating fit, and whether its interval lies inside the law. */
+  coverage: { value: number; bounded: boolean } | null;
 }
 
 /** Free order with its standard error. */
 export type FreeOrder = Pick<ApparentOrderFit, 'order' | 'orderSe' | 'dof'>;
 
 export interface Selection {
-  verdict: 'zero' | 'first' | 'second' | 'other' | 'undetermined';
+  verdict: 'zero' | 'first' | 'second' | 'saturating' | 'other' | 'undetermined';
   order: number | null;
+  /** The law that is asserted; null with `other` and `undetermined`. */
+  law: RateLawName | null;
   /** The law with the lowest AICc, asserted or not. */
   best: RateLawName;
   warnings: WarningCode[];
@@ -34,6 +38,10 @@ export interface Selection {
 export const EVIDENCE_TO_ASSERT = 10;
 /** A rival must have this many times the support of the best order to say that none holds. */
 export const EVIDENCE_FOR_OTHER = 30;
+/** The saturating law must have this many times the support of every law with an order … */
+export const EVIDENCE_TO_SATURATE = 30;
+/** … and of every other curve with as many parameters. */
+export const SATURATION_MARGIN = 3;
 /** How far the free order's interval may reach from the whole number that is asserted. */
 export const ORDER_TOLERANCE: Readonly<Record<number, number>> = { 0: 0.3, 1: 0.4, 2: 0.75 };
 
@@ -42,6 +50,17 @@ export function orderAgrees(free: FreeOrder | null, whole: number): boolean {
   if (free?.orderSe == null) return false;
   const reach = Math.abs(free.order - whole) + intervalFactor(free.dof) * free.orderSe;
   return reach <= (ORDER_TOLERANCE[whole] ?? 0);
+}
+
+/** True when a coverage inside the law describes the readings better than anything else. */
+function saturates({ rivals, coverage }: Evidence, best: LawEvidence): boolean {
+  const own = rivals.saturating;
+  if (own === undefined || coverage?.bounded !== true) return false;
+  const others = [rivals.order, rivals.plateau, rivals.deactivating];
+  return (
+    evidenceRatio(own, best.aicc) >= EVIDENCE_TO_SATURATE &&
+    others.every((one) => one === undefined || evidenceRatio(own, one) >= SATURATION_MARGIN)
+  );
 }
 
 /**
@@ -62,9 +81,20 @@ export function selectRateLaw(evidence: Evidence, free: FreeOrder | null): Selec
   const refuse = (verdict: 'other' | 'undetermined', warning: WarningCode): Selection => ({
     verdict,
     order: null,
+    law: null,
     best: best.name,
     warnings: [warning],
   });
+
+  if (saturates(evidence, best)) {
+    return {
+      verdict: 'saturating',
+      order: null,
+      law: 'saturating',
+      best: 'saturating',
+      warnings: [],
+    };
+  }
 
   if (evidenceRatio(strongest, best.aicc) >= EVIDENCE_FOR_OTHER) {
     return refuse('other', 'no-simple-order');
@@ -84,6 +114,7 @@ export function selectRateLaw(evidence: Evidence, free: FreeOrder | null): Selec
   return {
     verdict: best.name as 'zero' | 'first' | 'second',
     order: best.order,
+    law: best.name,
     best: best.name,
     warnings: [],
   };

@@ -155,7 +155,6 @@ describe('refusals', () => {
   });
 
   it.each([
-    ['law', { law: 'saturating' }],
     ['residual', { residual: true }],
     ['baseline', { baseline: true }],
   ])('%s that this engine does not hold says so', (key, given) => {
