@@ -45,7 +45,7 @@ export interface BatchSeriesResult {
   K: WithError | null;
   c0: WithError | null;
   /** After the blank. */
-  net: null;
+  net: { k: WithErrorAndLimits | null; initialRate: WithLimits | null } | null;
   conversion: number | null;
   initialRate: WithLimits | null;
   apparentOrder: { value: number; low: number | null; high: number | null } | null;
@@ -127,7 +127,13 @@ function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
     kRel: withError(analysis.kRel, 's^-1'),
     K: withError(analysis.adsorptionConstant, reciprocalUnit(dimension)),
     c0: withError(analysis.c0, baseUnit(dimension)),
-    net: null,
+    net:
+      analysis.net === null
+        ? null
+        : {
+            k: withBoth(analysis.net.k, analysis.kUnit),
+            initialRate: withLimits(analysis.net.initialRate, rateUnit(dimension)),
+          },
     conversion: analysis.conversion,
     initialRate: withLimits(analysis.initialRate, rateUnit(dimension)),
     apparentOrder: order === null ? null : { value: order.value, low: order.low, high: order.high },

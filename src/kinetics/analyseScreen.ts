@@ -1,8 +1,16 @@
 import { analyseWell, type AnalysedWell } from './analyseWell';
 import { analyseCatalyst } from './catalyst/analyseCatalyst';
 import { blankRates } from './catalyst/blanksReact';
+import { blankModel, type BlankModel } from './blanks/blankModel';
+import { netOfBlank } from './blanks/netOfBlank';
 import { ENGINE_VERSION } from './constants';
-import type { DecaySeries, ReferenceConditions, ScreenAnalysis, WellRole } from './types';
+import type {
+  DecaySeries,
+  ReadingDimension,
+  ReferenceConditions,
+  ScreenAnalysis,
+  WellRole,
+} from './types';
 
 const RANKED: readonly WellRole[] = ['sample', 'benchmark'];
 const BLANK: readonly WellRole[] = ['blank', 'support-blank'];
@@ -24,6 +32,12 @@ export function analyseScreen(
     return well;
   });
   const blanks = blankRates(wells.filter((well) => BLANK.includes(well.series.role)));
+  const models = blankModels(wells);
+  for (const well of wells) {
+    const model = models.get(well.analysis.dimension) ?? null;
+    if (model === null || !RANKED.includes(well.series.role)) continue;
+    well.analysis.net = netOfBlank(well, model);
+  }
   const byCatalyst = new Map<string, AnalysedWell[]>();
   for (const well of wells) {
     const { catalyst, role } = well.series;
@@ -36,7 +50,24 @@ export function analyseScreen(
     engine: ENGINE_VERSION,
     series: wells.map((well) => well.analysis),
     catalysts: [...byCatalyst].map(([catalyst, own]) =>
-      analyseCatalyst(catalyst, own, reference, blanks),
+      analyseCatalyst(
+        catalyst,
+        own,
+        reference,
+        blanks,
+        models.get(own[0]!.analysis.dimension) ?? null,
+      ),
     ),
   };
+}
+
+/** What goes on without the catalyst, for each dimension that has blanks. */
+function blankModels(wells: readonly AnalysedWell[]): Map<ReadingDimension, BlankModel> {
+  const blanks = wells.filter((well) => BLANK.includes(well.series.role));
+  const models = new Map<ReadingDimension, BlankModel>();
+  for (const dimension of new Set(blanks.map(({ analysis }) => analysis.dimension))) {
+    const model = blankModel(blanks, dimension);
+    if (model !== null) models.set(dimension, model);
+  }
+  return models;
 }

@@ -119,6 +119,7 @@ function emptyAnalysis(series: DecaySeries, readings: Readings): SeriesAnalysis 
     c0: null,
     conversion: null,
     initialRate: null,
+    net: null,
     apparentOrder: null,
     fits: {},
     shownLaw: null,

@@ -47,7 +47,11 @@ const WARNINGS: Record<WarningCode, string> = {
   'negative-activation-energy':
     'The rate falls with temperature; desorption of the reactant or loss of activity can do this: repeat the lowest temperature last.',
   'blank-reacts':
-    'A blank near these temperatures reacts too, and its share is still in these figures; compare the blank rate before ranking.',
+    'A blank near these temperatures reacts too, and its share is still in these figures; measure the blank at each temperature so that it can be taken off.',
+  'blank-subtracted':
+    'The blank reacts too; its rate was taken off, so figures are the catalyst’s own, but for the time to target, in which both work together.',
+  'not-above-blank':
+    'After the blank is taken off no rate is left; raise the loading, or find what reacts in the blank.',
   'extrapolated-temperature':
     'The reference temperature lies outside the measured ones, so figures there rest on the line alone; measure closer to it.',
   'extrapolated-concentration':

@@ -144,11 +144,19 @@ export type WarningCode =
   | 'low-activation-energy'
   | 'negative-activation-energy'
   | 'blank-reacts'
+  | 'blank-subtracted'
+  | 'not-above-blank'
   | 'extrapolated-temperature'
   | 'extrapolated-concentration'
   | 'few-wells'
   | 'no-reacting-wells'
   | 'reacts-only-together';
+
+/** What is left of a well's figures after the blank, in the same units. */
+export interface NetOfBlank {
+  k: Estimate | null;
+  initialRate: Estimate | null;
+}
 
 /** The engine's answer for one well. Serialisable: no NaN, no undefined. */
 export interface SeriesAnalysis {
@@ -179,6 +187,8 @@ export interface SeriesAnalysis {
   conversion: number | null;
   /** Base unit s⁻¹ at the first reading; kept for undetermined wells too. */
   initialRate: Estimate | null;
+  /** Null where no blank covers the temperature, and for blanks and controls. */
+  net: NetOfBlank | null;
   /** Free order n of −dC/dt = k Cⁿ; null when the readings do not hold it. */
   apparentOrder: Estimate | null;
   fits: Partial<Record<RateLawName, LawFit>>;

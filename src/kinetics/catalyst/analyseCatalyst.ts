@@ -10,6 +10,7 @@ import type {
   Verdict,
   WarningCode,
 } from '../types';
+import type { BlankModel } from '../blanks/blankModel';
 import { blanksReact, type BlankRate } from './blanksReact';
 import { describeByInitialRate } from './initialRateBasis';
 import { anyDecay } from './jointDecay';
@@ -33,6 +34,7 @@ const NOTHING: BasisResult = {
   initialRateActivationEnergy: null,
   lnA: null,
   adsorption: null,
+  net: false,
 };
 
 /**
@@ -42,12 +44,14 @@ const NOTHING: BasisResult = {
  * @param wells its samples (or benchmarks), at least one; wells whose results have another
  *   dimension than the first usable one's are left out
  * @param blanks what reacts without the catalyst, anywhere in the screen
+ * @param model of the blanks of the catalyst's dimension, to take their rate off
  */
 export function analyseCatalyst(
   catalyst: string,
   wells: readonly AnalysedWell[],
   reference: ReferenceConditions,
   blanks: readonly BlankRate[] = [],
+  model: BlankModel | null = null,
 ): CatalystAnalysis {
   const usable = wells.filter((well) => well.analysis.verdict !== 'unusable');
   const dimension = (usable[0] ?? wells[0])?.analysis.dimension ?? 'concentration';
@@ -65,13 +69,19 @@ export function analyseCatalyst(
   const warnings: WarningCode[] = [];
   const decided = decide(wells, pooled, decays, warnings);
 
-  let basis = NOTHING;
+  let basis: BasisResult = NOTHING;
   if (pooled.length > 0) {
     warnings.push(...loading.warnings);
-    basis = describeBasis(decided, pooled, dimension, reference);
+    basis = describeBasis(decided, pooled, dimension, reference, model, loading.loadingGPerL);
     warnings.push(...warnOfTemperatures(pooled, basis.arrhenius, reference));
-    if (blanksReact(blanks, pooled)) warnings.push('blank-reacts');
+    if (blanksReact(blanks, pooled)) {
+      warnings.push(basis.net ? 'blank-subtracted' : 'blank-reacts');
+    }
+    if (basis.net && basis.arrhenius === null && basis.kRef === null && basis.rateRef === null) {
+      warnings.push('not-above-blank');
+    }
   }
+  const { net: _, ...figures } = basis;
   const rateRefPerMass = perMass(
     basis.rateRef,
     dimension === 'concentration' ? loading.loadingGPerL : null,
@@ -83,7 +93,7 @@ export function analyseCatalyst(
     verdict: decided.verdict,
     order: decided.order,
     basis: decided.law === null ? 'initial-rate' : 'law',
-    ...basis,
+    ...figures,
     rateRefPerMass,
     turnoverFrequency: perSite(rateRefPerMass, pooled),
     loadingGPerL: pooled.length > 0 ? loading.loadingGPerL : null,
@@ -120,12 +130,14 @@ function describeBasis(
   wells: readonly PooledWell[],
   dimension: ReadingDimension,
   reference: ReferenceConditions,
+  model: BlankModel | null,
+  loadingGPerL: number | null,
 ): BasisResult {
   if (law === 'saturating') return describeBySaturation(wells, dimension, reference);
   const powerLaw = law === null ? null : rateLawOf(law, order);
   return powerLaw === null
     ? describeByInitialRate(wells, dimension, reference)
-    : describeByLaw(wells, powerLaw, dimension, reference);
+    : describeByLaw(wells, powerLaw, dimension, reference, model, loadingGPerL);
 }
 
 function decide(

@@ -15,7 +15,10 @@ export type BasisResult = Pick<
   | 'initialRateActivationEnergy'
   | 'lnA'
   | 'adsorption'
->;
+> & {
+  /** True when the blanks' rate was taken off. */
+  net: boolean;
+};
 
 /** A reacting well with the factor that brings its k to the pooled loading. */
 export interface PooledWell extends AnalysedWell {

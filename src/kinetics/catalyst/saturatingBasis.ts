@@ -193,6 +193,7 @@ export function describeBySaturation(
     rateRef: scaledConstant(alongLines(rates, t, lnRate), 0),
     timeToTarget: timeFromConstant(alongLines(reciprocals, t, lnPerTime), 0),
     bracket: false,
+    net: false,
     arrhenius: line,
     activationEnergy: line === null ? null : activationEnergyOf(line),
     initialRateActivationEnergy: null,
