@@ -98,11 +98,15 @@ const PLATE: CatalystPlan = {
 };
 
 const PLANS: readonly { name: string; plan: CatalystPlan }[] = [
-  { name: '4 temperatures × 2, replicates spread by 4 %', plan: PLATE },
-  { name: '4 × 2, and 0.7 K of temperature error a run', plan: { ...PLATE, blockErrorK: 0.7 } },
-  { name: '4 × 2, fit error alone', plan: { ...PLATE, replicateSpread: 0 } },
   {
-    name: '6 × 2, and 0.7 K a run',
+    name: '4 temperatures × 2, replicates spread by 4 %, runs 0.5 K off',
+    plan: { ...PLATE, blockErrorK: 0.5 },
+  },
+  { name: '4 × 2, runs 0.7 K off', plan: { ...PLATE, blockErrorK: 0.7 } },
+  { name: '4 × 2, runs true to temperature', plan: PLATE },
+  { name: '4 × 2, runs true and no spread of replicates', plan: { ...PLATE, replicateSpread: 0 } },
+  {
+    name: '6 × 2, runs 0.7 K off',
     plan: {
       ...PLATE,
       temperaturesK: [313.15, 320.15, 327.15, 334.15, 341.15, 348.15],
@@ -110,7 +114,7 @@ const PLANS: readonly { name: string; plan: CatalystPlan }[] = [
     },
   },
   {
-    name: '3 × 2, and 0.7 K a run',
+    name: '3 × 2, runs 0.7 K off',
     plan: { ...PLATE, temperaturesK: [323.15, 333.15, 343.15], blockErrorK: 0.7 },
   },
 ];
