@@ -57,7 +57,8 @@ describe('simulated curves', () => {
     const shape = { load: 3, level: 0.2, decay: 0.5 };
     for (const truth of TRUTHS) {
       if (truth === 'none') continue;
-      const { relative } = trueCurve(truth, shape);
+      const curve = trueCurve(truth, shape);
+      const relative = (u: number) => curve.relative(u);
       const slope = (u: number) => (relative(u + 1e-5) - relative(u - 1e-5)) / 2e-5;
       const expected: Record<string, (u: number) => number> = {
         zero: () => -1,
