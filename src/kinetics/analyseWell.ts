@@ -6,7 +6,8 @@ import { intervalFactor } from './statistics/tDistribution';
 import type { DecaySeries, Estimate, SeriesAnalysis, WarningCode } from './types';
 import { averageInitialRate } from './verdict/averageInitialRate';
 import { testForDecay, type DecayTest } from './verdict/decayTest';
-import { fitWell, type WeighedLaw, type WellFits } from './verdict/fitWell';
+import { residualsOfLaw, unitOfK, type FittedLaw } from './verdict/fittedLaw';
+import { fitWell, type WellFits } from './verdict/fitWell';
 import { testLackOfFit } from './verdict/lackOfFit';
 import { findOutliers } from './verdict/outliers';
 import {
@@ -62,7 +63,7 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   }
 
   const fits = fitWell(series, readings, forced);
-  const first = fits.laws.find((fitted) => fitted.order === 1)!;
+  const first = fits.laws.find((fitted) => fitted.law?.order === 1)!;
   const decay = testForDecay(
     readings,
     series.kind,
@@ -94,7 +95,7 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   };
 }
 
-function bestOf(fits: WellFits): WeighedLaw {
+function bestOf(fits: WellFits): FittedLaw {
   return fits.laws.reduce((best, fitted) => (fitted.criterion < best.criterion ? fitted : best));
 }
 
@@ -140,7 +141,7 @@ function describeDeadWell(
   fits: WellFits,
   decay: DecayTest,
 ): AnalysedWell {
-  const zero = fits.laws.find((fitted) => fitted.order === 0)!;
+  const zero = fits.laws.find((fitted) => fitted.law?.order === 0)!;
   const perReading =
     series.kind === 'product'
       ? 1 / series.productPerReactant
@@ -157,7 +158,7 @@ function describeDeadWell(
     fits: fits.byName,
     shownLaw: 'zero',
     residualSd: zero.fit.residualSd,
-    lackOfFit: testLackOfFit(zero.residuals(), fits.unit),
+    lackOfFit: testLackOfFit(residualsOfLaw(zero), fits.unit),
     outliers: findOutliers(zero, fits.unit, readings.indices),
     warnings: [...blank.warnings],
   };
@@ -179,10 +180,10 @@ function describeReactingWell(
   blank: SeriesAnalysis,
   fits: WellFits,
   selection: Selection,
-  shown: WeighedLaw,
+  shown: FittedLaw,
 ): SeriesAnalysis {
   const isForced = series.law !== 'auto';
-  const lackOfFit = testLackOfFit(shown.residuals(), fits.unit);
+  const lackOfFit = testLackOfFit(residualsOfLaw(shown), fits.unit);
   const misses = !isForced && selection.law !== null && lackOfFit.significant;
   const isAsserted = isForced || (selection.law !== null && !misses);
   const { fit, initialRate } = shown;
@@ -211,9 +212,9 @@ function describeReactingWell(
   return {
     ...blank,
     verdict: isForced ? 'forced' : misses ? 'other' : selection.verdict,
-    order: isAsserted ? shown.order : null,
+    order: isAsserted ? (shown.law?.order ?? null) : null,
     k,
-    kUnit: k === null ? null : shown.kUnit(blank.dimension),
+    kUnit: k === null ? null : unitOfK(shown, blank.dimension),
     adsorptionConstant:
       isAsserted && fit.saturation !== null
         ? estimate(fit.saturation.K, fit.saturation.KSe, fit.dof)

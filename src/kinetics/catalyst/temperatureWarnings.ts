@@ -23,7 +23,8 @@ export function warnOfTemperatures(
   if (line !== null) {
     if (line.activationEnergy < 0) warnings.push('negative-activation-energy');
     else if (line.activationEnergy < LOW_ACTIVATION_ENERGY) warnings.push('low-activation-energy');
-    if (testCurvature(line.points, RUN_TEMPERATURE_ERROR_K)?.curved) warnings.push('arrhenius-curved');
+    if (testCurvature(line.points, RUN_TEMPERATURE_ERROR_K)?.curved)
+      warnings.push('arrhenius-curved');
   }
   const t = reference.temperatureK;
   if (

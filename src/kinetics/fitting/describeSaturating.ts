@@ -8,22 +8,19 @@ import type { FitProblem } from './problem';
 import { resultDimension, type Readings } from './readings';
 
 /** Symmetric 3 × 3 matrix over (c0, kRel, coverage), row by row. */
-type Covariance = readonly number[];
+type Covariance = number[];
 
 /** A curve continued to time 0 by more than this factor is told at its first reading instead. */
 const FARTHEST_CONTINUATION = 1e3;
 
-const NO_CONSTANTS: Pick<SaturatingConstants, 'K' | 'KSe'> = { K: null, KSe: null };
-
 /** √(gᵀ V g); null where there is no covariance. */
-function errorOf(gradient: readonly number[], covariance: Covariance | null): number | null {
-  if (covariance === null) return null;
-  let variance = 0;
-  for (let i = 0; i < 3; i += 1) {
-    for (let j = 0; j < 3; j += 1) {
-      variance += gradient[i]! * gradient[j]! * covariance[3 * i + j]!;
-    }
-  }
+function errorOf(g0: number, g1: number, g2: number, v: Covariance | null): number | null {
+  if (v === null) return null;
+  const variance =
+    g0 * g0 * v[0]! +
+    g1 * g1 * v[4]! +
+    g2 * g2 * v[8]! +
+    2 * (g0 * g1 * v[1]! + g0 * g2 * v[2]! + g1 * g2 * v[5]!);
   return variance >= 0 ? finiteOrNull(Math.sqrt(variance)) : null;
 }
 
@@ -69,15 +66,18 @@ export function describeSaturating(
   const origin = momentOfFit(fit, problem, perAmplitude ?? 1, dof);
   const start = atTimeZero(origin);
   const first = moved(origin, Math.max(readings.times[0]! - problem.originS, 0));
-  const last = moved(origin, Math.max(readings.times[n - 1]! - problem.originS, 0));
-  const inUnits = known && resultDimension(series) !== 'ratio' && series.kind !== 'signal';
+  const lastU = origin.kRel * Math.max(readings.times[n - 1]! - problem.originS, 0);
+  const last = origin.c0 * saturatingShape(origin.coverage).relative(lastU);
+  const hasUnits = known && resultDimension(series) !== 'ratio' && series.kind !== 'signal';
+  const constants = constantsOf(start, hasUnits ? fit.limit : 'unknown');
   return {
     fit: {
-      ...constantsOf(start, inUnits ? fit.limit : 'unknown'),
+      k: constants.k,
+      kSe: constants.kSe,
       kRel: finiteOrNull(start.kRel),
-      kRelSe: errorOf([0, 1, 0], start.covariance),
+      kRelSe: errorOf(0, 1, 0, start.covariance),
       c0: known ? finiteOrNull(start.c0) : null,
-      c0Se: known && !fixed ? errorOf([1, 0, 0], start.covariance) : null,
+      c0Se: known && !fixed ? errorOf(1, 0, 0, start.covariance) : null,
       originS: start.originS,
       covariance: start.covariance === null || fixed ? null : start.covariance[1]!,
       rss: Math.min(rss, Number.MAX_VALUE),
@@ -85,13 +85,14 @@ export function describeSaturating(
       weight: null,
       residualSd: dof > 0 ? finiteOrNull(Math.sqrt(rss / dof)) : null,
       dof,
+      saturation: constants.saturation,
     },
     initialRate: {
       value: first.c0 * first.kRel,
-      se: errorOf([first.kRel, first.c0, 0], first.covariance),
+      se: errorOf(first.kRel, first.c0, 0, first.covariance),
     },
     firstConcentration: known ? finiteOrNull(first.c0) : null,
-    conversion: first.c0 > 0 ? finiteOrNull(1 - last.c0 / first.c0) : null,
+    conversion: first.c0 > 0 ? finiteOrNull(1 - last / first.c0) : null,
   };
 }
 
@@ -105,20 +106,32 @@ function momentOfFit(
   const toC = perAmplitude * problem.valueScale;
   const toRate = 1 / problem.timeScale;
   const variance = dof > 0 ? fit.rss / dof : NaN;
-  const unit = [toC, toRate, 1];
   return {
     originS: problem.originS,
     c0: fit.amplitude * toC,
     kRel: fit.kRel * toRate,
     coverage: fit.coverage,
     covariance:
-      fit.inverse === null || !(dof > 0)
-        ? null
-        : Array.from(
-            fit.inverse,
-            (value, i) => value * variance * unit[Math.floor(i / 3)]! * unit[i % 3]!,
-          ),
+      fit.inverse === null || !(dof > 0) ? null : inUnits(fit.inverse, variance, toC, toRate),
   };
+}
+
+/** The covariance of (c0, kRel, coverage) from the scaled inverse. */
+function inUnits(v: ArrayLike<number>, variance: number, toC: number, toRate: number): number[] {
+  const cr = v[1]! * variance * toC * toRate;
+  const cs = v[2]! * variance * toC;
+  const rs = v[5]! * variance * toRate;
+  return [
+    v[0]! * variance * toC * toC,
+    cr,
+    cs,
+    cr,
+    v[4]! * variance * toRate * toRate,
+    rs,
+    cs,
+    rs,
+    v[8]! * variance,
+  ];
 }
 
 /** Moved to time 0 along the fitted curve, where it can be continued that far. */
@@ -167,20 +180,18 @@ function constantsOf(
   const free = 1 - coverage;
   const saturation: SaturatingConstants = {
     coverage,
-    coverageSe: errorOf([0, 0, 1], covariance),
-    covariance: covariance === null ? null : [...covariance],
-    ...(inside
-      ? {
-          K: finiteOrNull(coverage / (free * c0)),
-          KSe: errorOf([-coverage / (free * c0 * c0), 0, 1 / (free * free * c0)], covariance),
-        }
-      : NO_CONSTANTS),
+    coverageSe: errorOf(0, 0, 1, covariance),
+    covariance,
+    K: inside ? finiteOrNull(coverage / (free * c0)) : null,
+    KSe: inside
+      ? errorOf(-coverage / (free * c0 * c0), 0, 1 / (free * free * c0), covariance)
+      : null,
   };
   const kKnown = inside || limit === 'zero';
   return {
     k: kKnown ? finiteOrNull((kRel * c0) / coverage) : null,
     kSe: kKnown
-      ? errorOf([kRel / coverage, c0 / coverage, (-kRel * c0) / coverage ** 2], covariance)
+      ? errorOf(kRel / coverage, c0 / coverage, (-kRel * c0) / coverage ** 2, covariance)
       : null,
     saturation,
   };

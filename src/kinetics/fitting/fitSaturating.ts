@@ -58,37 +58,42 @@ function profileSums(
   const sign = mode === 'decay' ? 1 : -1;
   const offset = mode === 'decay' ? 0 : 1;
   const free = 1 - coverage;
-  let [x, w, d, before] = [0, 1, 1, 0];
+  let x = 0;
+  let w = 1;
+  /** 1/(1 − σ + σ w). */
+  let id = 1;
+  let before = 0;
   let [p, q, pr, ps, prr, prs, pss, qr, qs, qrr, qrs, qss] = [0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0];
   for (let i = 0; i < t.length; i += 1) {
-    const u = kRel * t[i]!;
+    const ti = t[i]!;
+    const u = kRel * ti;
     if (u !== before) {
-      const h = (u - before) / d;
-      const c = (coverage * w) / d;
-      x += h * (-1 + h * (-0.5 * c + (h * c * (free / d - 2 * c)) / 6));
+      const h = (u - before) * id;
+      const c = coverage * w * id;
+      x += h * (-1 + h * (-0.5 * c + (h * c * (free * id - 2 * c)) / 6));
       before = u;
       for (let j = 0; j < 50; j += 1) {
         w = Math.exp(x);
-        d = free + coverage * w;
-        const newton = (free * x + coverage * w - coverage + u) / d;
-        const step = -newton / (1 - (0.5 * newton * coverage * w) / d);
+        id = 1 / (free + coverage * w);
+        const newton = (free * x + coverage * (w - 1) + u) * id;
+        const step = -newton * (1 + 0.5 * newton * coverage * w * id);
         x += step;
         if (step < SHORT && step > -SHORT) {
           w *= 1 + step * (1 + step * (0.5 + step * (1 / 6 + step / 24)));
-          d = free + coverage * w;
+          id *= 2 - id * (free + coverage * w);
           break;
         }
       }
     }
-    const v = w / d;
+    const v = w * id;
     const l = 1 - w + x;
-    const byW = free / (d * d);
-    const wr = -t[i]! * v;
+    const byW = free * id * id;
+    const wr = -ti * v;
     const ws = v * l;
-    const mixed = byW * l + (1 - w) / d;
-    const wrr = -t[i]! * byW * wr;
+    const mixed = byW * l + (1 - w) * id;
+    const wrr = -ti * byW * wr;
     const wrs = mixed * wr;
-    const wss = mixed * ws + (v * l * (1 - w)) / d;
+    const wss = mixed * ws + v * l * (1 - w) * id;
     if (visit !== null) visit(i, w, wr, ws);
     const f = offset + sign * w;
     const sy = sign * y[i]!;
@@ -236,11 +241,19 @@ export function fitSaturating(
   let yy = 0;
   for (let i = 0; i < problem.y.length; i += 1) yy += problem.y[i]! * problem.y[i]!;
   const rate = first.kRel > 1e-3 ? first.kRel : 1e-3;
-  let at = descend(problem, yy, 0.8 * rate, 0.4);
-  const least = Math.min(first.rss, zero.rss);
-  const unsettled = at.rss > least + 1e-13 * yy;
   // Growth leaves amplitude and kRel a long valley, where one start is not enough.
   const growing = problem.mode === 'growth';
+  if (!growing && first.rss < zero.rss && first.kRel > 1e-3) {
+    const bare = placeAt(problem, yy, first.kRel, 0);
+    if (bare.gs > 0) return finish(problem, bare);
+  }
+  // The better a limit fits, the nearer to it the search begins.
+  const [a, b] = [Math.sqrt(first.rss), Math.sqrt(zero.rss)];
+  const start = growing || !(a + b > 0) ? 0.4 : Math.min(Math.max(a / (a + b), 0.05), 0.9);
+  const between = !growing && zero.kRel > 0 ? rate * (zero.kRel / rate) ** start : 0.8 * rate;
+  let at = descend(problem, yy, between, start);
+  const least = Math.min(first.rss, zero.rss);
+  const unsettled = at.rss > least + 1e-13 * yy;
   if (growing || (unsettled && zero.rss < first.rss)) {
     // Growth that has not run out yet has no kRel of zero order.
     const again = descend(problem, yy, zero.kRel > 0 ? zero.kRel : 1, 0.97);

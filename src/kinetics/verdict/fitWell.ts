@@ -7,19 +7,13 @@ import { rateLaws, type RequestedLaw } from '../rateLaws/registry';
 import { aicc, akaikeWeights } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
 import type { DecaySeries, LawFit, RateLawName } from '../types';
-import { fitOrder, fitSaturation, type FittedLaw } from './fittedLaw';
+import { fitOrder, fitSaturation, leastRss, type FittedLaw, type FittedOrder } from './fittedLaw';
 import type { Evidence } from './selectRateLaw';
-
-/** A fitted law with what it is weighed by. */
-export interface WeighedLaw extends FittedLaw {
-  /** AICc with rss held above rounding; plain AIC where readings are too few for AICc. */
-  criterion: number;
-}
 
 /** Everything fitted to one well. */
 export interface WellFits {
   /** The laws with an order, then the saturating law, then a forced one. */
-  laws: WeighedLaw[];
+  laws: FittedLaw[];
   /** Every fit by name, weights filled in. */
   byName: Partial<Record<RateLawName, LawFit>>;
   apparentOrder: ApparentOrderFit | null;
@@ -31,7 +25,6 @@ export interface WellFits {
   unit: number;
 }
 
-const ROUNDING = 1e-14;
 const FEWEST_FOR_ORDERS = 5;
 /** AICc of three parameters and the noise needs one more. */
 const FEWEST_FOR_SATURATION = 6;
@@ -53,31 +46,24 @@ export function fitWell(
 ): WellFits {
   const problem = scaleReadings(readings, series.kind);
   const n = readings.values.length;
-  const floor = n * (ROUNDING * problem.valueScale) ** 2;
   const criterionOf = (rss: number, parameters: number) =>
-    aicc(n, Math.max(rss, floor), parameters);
-  const weigh = <F extends FittedLaw>(fitted: F): F & WeighedLaw => {
-    const { rss } = fitted.fit;
-    const plain = n * Math.log(Math.max(rss, floor) / n) + 2 * fitted.parameters;
-    return { ...fitted, criterion: criterionOf(rss, fitted.parameters) ?? plain };
-  };
+    aicc(n, Math.max(rss, leastRss(problem)), parameters);
 
-  const orders = rateLaws.map((law) => weigh(fitOrder(problem, law, series, readings)));
-  const byOrder = (order: number) => orders.find((fitted) => fitted.order === order)!.relative;
-  const saturating =
+  const orders = rateLaws.map((law) => fitOrder(problem, law, series, readings));
+  const byOrder = (order: number) => orders.find(({ law }) => law.order === order)!.relative;
+  const saturation =
     n >= FEWEST_FOR_SATURATION || forced?.name === 'saturating'
       ? fitSaturation(problem, byOrder(1), byOrder(0), series, readings)
       : null;
-  const saturation = saturating === null ? null : weigh(saturating);
   const weighable = saturation !== null && n >= FEWEST_FOR_SATURATION ? saturation : null;
-  const tried: WeighedLaw[] = weighable === null ? orders : [...orders, weighable];
+  const tried: FittedLaw[] = weighable === null ? orders : [...orders, weighable];
   const weights = n >= FEWEST_FOR_ORDERS ? akaikeWeights(tried.map((one) => one.criterion)) : null;
   tried.forEach((fitted, i) => (fitted.fit.weight = weights?.[i] ?? null));
 
-  const laws: WeighedLaw[] = saturation === null ? [...orders] : [...orders, saturation];
+  const laws: FittedLaw[] = saturation === null ? [...orders] : [...orders, saturation];
   const another = forced?.law ?? null;
   if (another !== null && !rateLaws.includes(another)) {
-    laws.push(weigh(fitOrder(problem, another, series, readings)));
+    laws.push(fitOrder(problem, another, series, readings));
   }
   const byName: WellFits['byName'] = {};
   for (const fitted of laws) byName[fitted.name] = fitted.fit;
@@ -91,14 +77,14 @@ export function fitWell(
       n >= FEWEST_FOR_ORDERS
         ? gatherEvidence(orders, weighable, byOrder(1), apparentOrder, criterionOf)
         : null,
-    exact: tried.some((fitted) => fitted.fit.rss <= floor),
+    exact: tried.some((fitted) => fitted.fit.rss <= leastRss(problem)),
     unit: problem.valueScale,
   };
 }
 
 function gatherEvidence(
-  orders: readonly WeighedLaw[],
-  saturation: WeighedLaw | null,
+  orders: readonly FittedOrder[],
+  saturation: FittedLaw | null,
   first: RelativeFit,
   apparentOrder: ApparentOrderFit | null,
   criterionOf: (rss: number, parameters: number) => number | null,
@@ -114,7 +100,7 @@ function gatherEvidence(
   const parameters = orders[0]!.parameters;
   const unit = first.problem.valueScale ** 2;
   return {
-    laws: orders.map(({ name, order, criterion }) => ({ name, order: order!, aicc: criterion })),
+    laws: orders.map(({ name, law, criterion }) => ({ name, order: law.order, aicc: criterion })),
     rivals,
     rivalCharge: (criterionOf(unit, parameters + 1) ?? 0) - (criterionOf(unit, parameters) ?? 0),
     coverage: saturation === null ? null : coverageRange(saturation),
@@ -122,7 +108,7 @@ function gatherEvidence(
 }
 
 /** The coverage's 95 % interval, where it lies inside the law. */
-function coverageRange({ fit }: WeighedLaw): Evidence['coverage'] {
+function coverageRange({ fit }: FittedLaw): Evidence['coverage'] {
   const { coverage, coverageSe } = fit.saturation!;
   if (coverageSe === null) return null;
   const half = intervalFactor(fit.dof) * coverageSe;

@@ -10,25 +10,27 @@ import {
 import type { FitProblem } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
 import type { RateLaw } from '../rateLaws/rateLaw';
+import { aicc } from '../statistics/goodnessOfFit';
 import { rateConstantUnit } from '../rateLaws/rateConstantUnit';
 import type { DecaySeries, RateLawName, ReadingDimension } from '../types';
 
 /** One law with its fit to one well. */
 export interface FittedLaw extends DescribedFit {
   name: RateLawName;
-  /** Null for the saturating law. */
-  order: number | null;
   parameters: number;
-  kUnit(dimension: ReadingDimension): string;
-  /** The reading's base unit, in time order. */
-  residuals(): number[];
-  /** Diagonal of the hat matrix, in time order; null where the Jacobian is singular. */
-  leverages(): number[] | null;
+  /** AICc with rss held above rounding; plain AIC where readings are too few for AICc. */
+  criterion: number;
+  problem: FitProblem;
+  /** Null for the saturating law, which has no order. */
+  law: RateLaw | null;
   /** The fit of a law that has an order. */
   relative: RelativeFit | null;
   /** The fit of the saturating law. */
   saturating: SaturatingFit | null;
 }
+
+/** A fitted law that has an order. */
+export type FittedOrder = FittedLaw & { law: RateLaw; relative: RelativeFit };
 
 /** Fits a law that has an order. */
 export function fitOrder(
@@ -36,16 +38,19 @@ export function fitOrder(
   law: RateLaw,
   series: DecaySeries,
   readings: Readings,
-): FittedLaw & { relative: RelativeFit } {
+): FittedOrder {
   const relative = fitLaw(problem, law);
+  const described = describeFit(relative, series, readings);
   return {
-    ...describeFit(relative, series, readings),
+    fit: described.fit,
+    initialRate: described.initialRate,
+    firstConcentration: described.firstConcentration,
+    conversion: described.conversion,
     name: law.name,
-    order: law.order,
     parameters: relative.parameters,
-    kUnit: (dimension) => law.kUnit(dimension),
-    residuals: () => residualsOf(relative),
-    leverages: () => leveragesOf(relative),
+    criterion: criterionOf(problem, relative.rss, relative.parameters),
+    problem,
+    law,
     relative,
     saturating: null,
   };
@@ -64,22 +69,57 @@ export function fitSaturation(
   series: DecaySeries,
   readings: Readings,
 ): FittedLaw | null {
-  const scaled = ({ kRel, rss }: RelativeFit) => ({
-    kRel: (kRel ?? 0) * problem.timeScale,
-    rss: rss / problem.valueScale ** 2,
-  });
-  const saturating = fitSaturating(problem, scaled(first), scaled(zero));
+  const saturating = fitSaturating(problem, scaled(first, problem), scaled(zero, problem));
   if (!Number.isFinite(saturating.rss)) return null;
+  const described = describeSaturating(saturating, problem, series, readings);
+  const parameters = problem.mode === 'fraction' ? 2 : 3;
   return {
-    ...describeSaturating(saturating, problem, series, readings),
+    fit: described.fit,
+    initialRate: described.initialRate,
+    firstConcentration: described.firstConcentration,
+    conversion: described.conversion,
     name: 'saturating',
-    order: null,
-    parameters: problem.mode === 'fraction' ? 2 : 3,
-    // k is the rate on the full surface.
-    kUnit: (dimension) => rateConstantUnit(0, dimension),
-    residuals: () => saturatingResiduals(problem, saturating),
-    leverages: () => saturatingLeverages(problem, saturating),
+    parameters,
+    criterion: criterionOf(problem, described.fit.rss, parameters),
+    problem,
+    law: null,
     relative: null,
     saturating,
   };
+}
+
+const ROUNDING = 1e-14;
+
+/** Residual sums of squares below this are rounding, base unit squared. */
+export function leastRss({ t, valueScale }: FitProblem): number {
+  return t.length * (ROUNDING * valueScale) ** 2;
+}
+
+/** What laws are weighed by. */
+function criterionOf(problem: FitProblem, rss: number, parameters: number): number {
+  const n = problem.t.length;
+  const held = Math.max(rss, leastRss(problem));
+  return aicc(n, held, parameters) ?? n * Math.log(held / n) + 2 * parameters;
+}
+
+const scaled = ({ kRel, rss }: RelativeFit, { timeScale, valueScale }: FitProblem) => ({
+  kRel: (kRel ?? 0) * timeScale,
+  rss: rss / valueScale ** 2,
+});
+
+/** Readings less the curve, in the reading's base unit, in time order. */
+export function residualsOfLaw({ problem, relative, saturating }: FittedLaw): number[] {
+  if (relative !== null) return residualsOf(relative);
+  return saturating === null ? [] : saturatingResiduals(problem, saturating);
+}
+
+/** Diagonal of the hat matrix, in time order; null where the Jacobian is singular. */
+export function leveragesOfLaw({ problem, relative, saturating }: FittedLaw): number[] | null {
+  if (relative !== null) return leveragesOf(relative);
+  return saturating === null ? null : saturatingLeverages(problem, saturating);
+}
+
+/** Unit of k: that of the law's order; in the saturating law k is the rate on the full surface. */
+export function unitOfK({ law }: FittedLaw, dimension: ReadingDimension): string {
+  return rateConstantUnit(law?.order ?? 0, dimension);
 }

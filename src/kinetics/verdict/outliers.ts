@@ -1,5 +1,5 @@
 import { studentTQuantile } from '../statistics/tDistribution';
-import type { FittedLaw } from './fittedLaw';
+import { leveragesOfLaw, residualsOfLaw, type FittedLaw } from './fittedLaw';
 
 /** Chance that a well without outliers has any reading pointed out (Bonferroni over readings). */
 const OUTLIER_LEVEL = 0.002;
@@ -32,11 +32,11 @@ export function findOutliers(
   indices: readonly number[],
 ): number[] {
   const dof = fitted.fit.dof - 1;
-  const leverages = dof < 1 ? null : fitted.leverages();
+  const leverages = dof < 1 ? null : leveragesOfLaw(fitted);
   if (leverages === null) return [];
   const limit = outlierLimit(leverages.length, dof);
   const found: number[] = [];
-  fitted.residuals().forEach((residual, i) => {
+  residualsOfLaw(fitted).forEach((residual, i) => {
     const free = 1 - leverages[i]!;
     if (free < 1e-9 || Math.abs(residual) < ROUNDING * unit) return;
     const without = Math.max(fitted.fit.rss - (residual * residual) / free, 0) / dof;
