@@ -16,7 +16,7 @@ const RANKED: readonly WellRole[] = ['sample', 'benchmark'];
 const BLANK: readonly WellRole[] = ['blank', 'support-blank'];
 
 /**
- * Analyses every well of a screen and every catalyst in it, in the order of first appearance.
+ * Analyses every well of a screen and every catalyst in it.
  *
  * @param onProgress called after each well with the number done
  * @throws RangeError as `analyseWell` does
@@ -31,6 +31,19 @@ export function analyseScreen(
     onProgress?.(i + 1, series.length);
     return well;
   });
+  return concludeScreen(wells, reference);
+}
+
+/**
+ * What the wells of a screen come to: each after the blank, and every catalyst in the order of first
+ * appearance.
+ *
+ * @param wells all of one screen; their `net` is filled in
+ */
+export function concludeScreen(
+  wells: readonly AnalysedWell[],
+  reference: ReferenceConditions,
+): ScreenAnalysis {
   const blanks = blankRates(wells.filter((well) => BLANK.includes(well.series.role)));
   const models = blankModels(wells);
   for (const well of wells) {

@@ -1,9 +1,10 @@
 import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
-import { MessageChannel } from 'node:worker_threads';
+import { MessageChannel, type Transferable } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import { problems } from '../errors';
 import type { DecaySeries, ReferenceConditions, ScreenAnalysis } from '../kinetics/types';
+import type { Helper } from '../workers/sharedWells';
 import type { ParsedWorkbook } from '../workbooks/types';
 
 export interface BatchAnswer {
@@ -33,6 +34,9 @@ export interface WorkerPools {
 const workbookSeconds = 60;
 const workbookMegabytes = 512;
 const waitingBatches = 32;
+/** From these sizes on several threads share the work. */
+const largeBatchBytes = 250_000;
+const largeScreenWells = 200;
 
 function workbookTooHeavy(cause: unknown) {
   return problems.workbookFaults(
@@ -53,12 +57,16 @@ function workbookTooHeavy(cause: unknown) {
   );
 }
 
-/** Opens the pools on the bundled workers in `folder`; threads start when there is work. */
-export function openWorkerPools(folder: string): WorkerPools {
+/**
+ * Opens the pools on the bundled workers in `folder`; threads start when there is work.
+ *
+ * @param threads that fit at a time; all cores unless given
+ */
+export function openWorkerPools(folder: string, threads = availableParallelism()): WorkerPools {
   const file = (name: string) => resolve(folder, `${name}.worker.mjs`);
   const engine = new Piscina({
     minThreads: 0,
-    maxThreads: availableParallelism(),
+    maxThreads: threads,
     idleTimeout: 60_000,
     maxQueue: waitingBatches,
   });
@@ -70,13 +78,40 @@ export function openWorkerPools(folder: string): WorkerPools {
     resourceLimits: { maxOldGenerationSizeMb: workbookMegabytes },
   });
 
+  /**
+   * Runs a task that may have helpers: the task first, so that no thread waits for one that is not
+   * there yet. A helper that comes too late goes again.
+   */
+  const runShared = (
+    name: string,
+    task: object,
+    transferList: Transferable[],
+    large: boolean,
+  ): Promise<unknown> => {
+    const channels = Array.from({ length: large ? threads - 1 : 0 }, () => {
+      const { port1, port2 } = new MessageChannel();
+      const signal = new SharedArrayBuffer(8);
+      return { own: { port: port1, signal }, other: { port: port2, signal } };
+    });
+    const helpers: Helper[] = channels.map(({ own }) => own);
+    const running = engine.run(
+      { ...task, helpers },
+      { filename: file(name), transferList: [...transferList, ...helpers.map(({ port }) => port)] },
+    );
+    for (const { other } of channels) {
+      engine
+        .run(other, { filename: file('wells'), transferList: [other.port] })
+        // The thread that shares out fits what a lost helper leaves.
+        .catch(() => undefined);
+    }
+    return running;
+  };
+
   return {
     async answerBatch(bytes) {
       if (engine.queueSize >= waitingBatches) throw problems.busy();
-      return (await engine.run(bytes, {
-        filename: file('batch'),
-        transferList: [bytes.buffer],
-      })) as BatchAnswer;
+      const large = bytes.byteLength >= largeBatchBytes;
+      return (await runShared('batch', { bytes }, [bytes.buffer], large)) as BatchAnswer;
     },
     async analyseScreen(input, onProgress) {
       const { port1, port2 } = new MessageChannel();
@@ -84,10 +119,9 @@ export function openWorkerPools(folder: string): WorkerPools {
         onProgress(message.done, message.total);
       });
       try {
-        return (await engine.run(
-          { ...input, port: port2 },
-          { filename: file('screen'), transferList: [port2] },
-        )) as ScreenAnalysis;
+        const large = input.series.length >= largeScreenWells;
+        const task = { ...input, port: port2 };
+        return (await runShared('screen', task, [port2], large)) as ScreenAnalysis;
       } finally {
         port1.close();
       }

@@ -2,7 +2,8 @@ import { notJsonProblem, type BatchProblem } from '../contracts/batchProblem';
 import { parseBatchRequest } from '../contracts/batchRequest';
 import { batchResponse } from '../contracts/batchResponse';
 import { decaySeriesOf, referenceOf } from '../contracts/batchToEngine';
-import { analyseScreen } from '../kinetics/analyseScreen';
+import { concludeScreen } from '../kinetics/analyseScreen';
+import { analyseWellsShared, type Helper } from './sharedWells';
 
 /** An HTTP answer without the server around it. */
 export interface BatchAnswer {
@@ -22,9 +23,10 @@ const refuse = (problem: BatchProblem) =>
  * Parses, checks, analyses and writes one batch.
  *
  * @param bytes the body of the request, UTF-8
+ * @param helpers threads that fit wells for this one
  * @returns status 200 with the answer, else 400, 413 or 422 with a problem (RFC 9457)
  */
-export function answerBatch(bytes: Uint8Array): BatchAnswer {
+export function answerBatch(bytes: Uint8Array, helpers: readonly Helper[] = []): BatchAnswer {
   let document: unknown;
   try {
     document = JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
@@ -35,6 +37,7 @@ export function answerBatch(bytes: Uint8Array): BatchAnswer {
   const parsed = parseBatchRequest(document);
   if (!parsed.ok) return refuse(parsed.problem);
   const { series, reference } = parsed.request;
-  const analysis = analyseScreen(series.map(decaySeriesOf), referenceOf(reference));
+  const wells = analyseWellsShared(series.map(decaySeriesOf), helpers);
+  const analysis = concludeScreen(wells, referenceOf(reference));
   return writeJson(200, 'application/json', batchResponse(analysis));
 }

@@ -177,7 +177,7 @@ describe('refusals', () => {
 
 describe('worker entries', () => {
   it('batch answers bytes with bytes', () => {
-    expect(runBatch(encode('{"series":[]}')).status).toBe(200);
+    expect(runBatch({ bytes: encode('{"series":[]}') }).status).toBe(200);
   });
   it('screen posts its progress to the end', () => {
     const series = Array.from({ length: 120 }, (_, i) =>
