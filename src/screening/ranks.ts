@@ -122,13 +122,11 @@ function normalPairs(random: RandomStream): (into: Float64Array) => void {
  *
  * @param lnValues any one unit; null for what is not ranked; aligned with the draws
  * @param first the chance to be among how many is asked for, from 1
- * @param sign −1 where the errors act the other way on what is ranked, as on a time
  */
 export function rankCandidates(
   lnValues: readonly (number | null)[],
   { draws, candidates, errors, known }: ErrorDraws,
   first: number,
-  sign: 1 | -1 = 1,
 ): (Ranking | null)[] {
   const placed = lnValues
     .map((ln, index) => ({ ln, index }))
@@ -142,7 +140,7 @@ export function rankCandidates(
   for (let draw = 0; draw < draws; draw += 1) {
     for (let p = 0; p < count; p += 1) {
       const { ln, index } = placed[p]!;
-      drawn[p] = ln + sign * errors[draw * candidates + index]!;
+      drawn[p] = ln + errors[draw * candidates + index]!;
     }
     sorted.set(drawn);
     sorted.sort();

@@ -99,6 +99,8 @@ describe('rank intervals', () => {
     { candidates: 30, spread: 0.4, blockErrorK: 0, replicateSd: 0.06 },
     { candidates: 30, spread: 0.4, blockErrorK: 0, replicateSd: 0.04, ownBlockSd: 0.05 },
     { candidates: 30, spread: 0.4, blockErrorK: 1, replicateSd: 0.04, plates: 3 },
+    { candidates: 100, spread: 0.2, blockErrorK: 0.5, replicateSd: 0.06 },
+    { candidates: 100, spread: 0.2, blockErrorK: 0, replicateSd: 0.06 },
     { candidates: 8, spread: 0.2, blockErrorK: 0.5, replicateSd: 0.05 },
   ])('cover the true rank: %o', (plan) => {
     const { coverage: covered, trueBestTied } = coverage(plan, runs, 7);
