@@ -6,7 +6,7 @@ import type {
   WarningCode,
 } from '../kinetics/types';
 import type { HeatmapCell } from '../screening/heatmap';
-import type { Rankings } from '../screening/rankLeaderboard';
+import type { Rankings } from '../screening/rankedMeasures';
 import type { DecisionState } from './decisions';
 
 export type { HeatmapCell };

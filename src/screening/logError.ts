@@ -14,8 +14,6 @@ export interface LogError {
   dof: number;
 }
 
-const factors = Array.from({ length: MANY }, (_, i) => intervalFactor(i + 1));
-
 /**
  * The error of ln x that an estimate's 95 % interval stands for, ln x ± t se. Where the estimate
  * has no standard error of its own the interval is taken for a normal one.
@@ -29,8 +27,10 @@ export function logErrorOf({ value, se, low, high }: Estimate): LogError | null 
   if (!(own > 0)) return { se: half / Z975, dof: Infinity };
   // The factor falls as the degrees of freedom rise; both came from the same table.
   const factor = half / own;
-  const at = factors.findIndex((one) => one <= factor * (1 + 1e-9));
-  return { se: own, dof: at < 0 ? Infinity : at + 1 };
+  for (let dof = 1; dof <= MANY; dof += 1) {
+    if (intervalFactor(dof) <= factor * (1 + 1e-9)) return { se: own, dof };
+  }
+  return { se: own, dof: Infinity };
 }
 
 const shapes = new Map<number, number>();
@@ -38,7 +38,9 @@ const shapes = new Map<number, number>();
 /**
  * Turns a standard normal draw into one of Student's t: t² = ν (exp(c z²/ν) − 1), the inverse of
  * the normal approximation of D. L. Wallace (1959), with c set so that the 95 % interval is exact.
- * Elsewhere it is an approximation: at 80 % 12 % short for ν = 1, 1 % from ν = 3 on.
+ * Elsewhere it is an approximation: the ends of the 80 % interval come
+ * out 9 % short for ν = 1, 2 % for ν = 2 and 1 % for ν = 3, those of the 99 % interval 27, 5 and
+ * 2 % long.
  *
  * @param dof ν, above 0; `Infinity` returns z
  */

@@ -1,18 +1,11 @@
 import type { CatalystAnalysis, Estimate } from '../kinetics/types';
 import { splitErrors } from './blockErrors';
 import { logErrorOf } from './logError';
+import { FIRST_CANDIDATES, kGroupOf, type Rankings } from './rankedMeasures';
 import { drawErrors, rankCandidates, type ErrorDraws, type Ranking } from './ranks';
 
-/** How many candidates a campaign takes on unless it says otherwise: the first three. */
-export const FIRST_CANDIDATES = 3;
 /** Any fixed number: the same results always get the same ranks. */
 const SEED = 20_261_201;
-
-/** What candidates are ranked by. */
-export type RankedMeasure = 'rate' | 'perGram' | 'turnover' | 'time' | 'k';
-
-/** A candidate's place by each measure; null where it is not ranked. */
-export type Rankings = Record<RankedMeasure, Ranking | null>;
 
 /** A candidate as its analysis left it, with the screen that it was measured in. */
 export type RankedResult = Pick<
@@ -28,11 +21,6 @@ export type RankedResult = Pick<
   | 'bracket'
   | 'arrhenius'
 > & { screenId: string };
-
-/** Rows whose k may be ranked together: one order and one unit; null without a k. */
-export function kGroupOf(row: Pick<RankedResult, 'verdict' | 'order' | 'kUnit'>): string | null {
-  return row.kUnit === null ? null : `${row.order ?? row.verdict}|${row.kUnit}`;
-}
 
 /**
  * Ranks a campaign's candidates by every measure, from one set of joint draws: all measures follow

@@ -2,11 +2,11 @@ import { randomStream, type RandomStream } from '../kinetics/statistics/randomSt
 import { studentDraw, type LogError } from './logError';
 
 /** Draws of a ranking of up to a thousand candidates. */
-const MOST_DRAWS = 1000;
+const MOST_DRAWS = 500;
 /** Draws of a long ranking: enough for a 95 % interval. */
-const LEAST_DRAWS = 200;
+const LEAST_DRAWS = 120;
 /** Draws times candidates that a long ranking is held to. */
-const MOST_WORK = 1_000_000;
+const MOST_WORK = 500_000;
 /** Left out at either end of a 95 % interval. */
 const TAIL = 0.025;
 

@@ -4,9 +4,9 @@ import type { Database } from '../db/client';
 import { listCandidateStates, listTags } from '../db/repositories/candidates';
 import { explainCatalyst, explainWarning } from '../kinetics';
 import type { CatalystAnalysis } from '../kinetics/types';
-import { rankLeaderboard } from '../screening/rankLeaderboard';
 import { requireCampaign, summariseCampaign } from './campaigns';
 import { loadCurrentAnalyses, loadCurrentResults, type CurrentResult } from './currentAnalyses';
+import { rankingsOf } from './rankings';
 
 type Unplaced = Omit<LeaderboardRow, 'ranks' | 'tags' | 'decision'>;
 
@@ -64,15 +64,21 @@ export async function viewLeaderboard(
     current,
     result: JSON.parse(current.row.result) as CatalystAnalysis,
   }));
-  const ranks = rankLeaderboard(
-    candidates.map(({ current, result }) => ({ ...result, screenId: current.row.screenId })),
+  const ranks = rankingsOf(
+    campaignId,
+    current.finished.map((row) => row.analysis.id),
     campaign.referenceTemperatureK,
+    candidates.map(({ current: { row }, result }) => ({
+      ...result,
+      catalystId: row.catalystId,
+      screenId: row.screenId,
+    })),
   );
   return {
     campaign: summariseCampaign(campaign),
-    rows: candidates.map(({ current, result }, index) => ({
+    rows: candidates.map(({ current, result }) => ({
       ...rowOf(current, result),
-      ranks: ranks[index]!,
+      ranks: ranks.get(current.row.catalystId)!,
       tags: tags.get(current.row.catalystId) ?? [],
       decision: states.get(current.row.catalystId) ?? { state: 'open', version: 0 },
     })),

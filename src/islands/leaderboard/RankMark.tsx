@@ -1,4 +1,4 @@
-import { FIRST_CANDIDATES } from '../../screening/rankLeaderboard';
+import { FIRST_CANDIDATES } from '../../screening/rankedMeasures';
 import { formatPercent } from '../numbers';
 import type { Rank } from './arrange';
 

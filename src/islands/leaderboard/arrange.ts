@@ -1,7 +1,7 @@
 import type { LeaderboardRow } from '../../contracts/leaderboard';
 import type { Estimate } from '../../kinetics/types';
 import { decisionStates } from '../../screening/decisions';
-import { kGroupOf, type RankedMeasure } from '../../screening/rankLeaderboard';
+import { kGroupOf, type RankedMeasure } from '../../screening/rankedMeasures';
 import { printedUnit } from '../candidate/figures';
 import { verdicts, type LeaderboardLook, type SortId } from './address';
 import { keepsRow } from './filterRows';

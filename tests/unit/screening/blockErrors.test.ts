@@ -81,18 +81,16 @@ function coverage(plan: Plan, runs: number, seed: number) {
       total += 1;
     });
   }
-  const report = {
+  return {
     coverage: inside / total,
     width: width / total,
     ties: ties / runs,
     trueBestTied: trueBestTied / runs,
   };
-  if (process.env['SHOW']) console.log(plan, report);
-  return report;
 }
 
 describe('rank intervals', () => {
-  const runs = 60;
+  const runs = 25;
 
   it.each([
     { candidates: 30, spread: 0.4, blockErrorK: 0.5, replicateSd: 0.06 },
@@ -100,11 +98,55 @@ describe('rank intervals', () => {
     { candidates: 30, spread: 0.4, blockErrorK: 0, replicateSd: 0.04, ownBlockSd: 0.05 },
     { candidates: 30, spread: 0.4, blockErrorK: 1, replicateSd: 0.04, plates: 3 },
     { candidates: 100, spread: 0.2, blockErrorK: 0.5, replicateSd: 0.06 },
-    { candidates: 100, spread: 0.2, blockErrorK: 0, replicateSd: 0.06 },
     { candidates: 8, spread: 0.2, blockErrorK: 0.5, replicateSd: 0.05 },
   ])('cover the true rank: %o', (plan) => {
     const { coverage: covered, trueBestTied } = coverage(plan, runs, 7);
     expect(covered).toBeGreaterThan(0.93);
     expect(trueBestTied).toBeGreaterThan(0.9);
+  });
+
+  it('do not widen, nor ties multiply, for an error that all candidates share', () => {
+    const plan = { candidates: 30, spread: 0.4, replicateSd: 0.06 };
+    const without = coverage({ ...plan, blockErrorK: 0 }, runs, 7);
+    const shared = coverage({ ...plan, blockErrorK: 0.5 }, runs, 7);
+    expect(shared.width).toBeLessThan(1.2 * without.width);
+    expect(shared.ties).toBeLessThan(1.3 * without.ties);
+  });
+});
+
+describe('the error that a block’s candidates share', () => {
+  it('is found from how their residuals go together', () => {
+    const random = randomStream(21);
+    let squares = 0;
+    for (let run = 0; run < 20; run += 1) {
+      const plan = { candidates: 24, spread: 0.5, blockErrorK: 0.8, replicateSd: 0.03, plates: 4 };
+      squares += splitErrors(simulate(plan, random).lines, REFERENCE_K).shared.sd ** 2;
+    }
+    expect(Math.sqrt(squares / 20)).toBeGreaterThan(0.65);
+    expect(Math.sqrt(squares / 20)).toBeLessThan(0.95);
+  });
+
+  it('is small where every candidate errs by itself', () => {
+    const plan = {
+      candidates: 40,
+      spread: 0.5,
+      blockErrorK: 0,
+      replicateSd: 0.03,
+      ownBlockSd: 0.05,
+    };
+    // 0.05 in ln k is 0.9 K at 50 kJ/mol and 333 K.
+    expect(splitErrors(simulate(plan, randomStream(5)).lines, REFERENCE_K).shared.sd).toBeLessThan(
+      0.3,
+    );
+  });
+
+  it('is not made up for candidates that stand alone in their blocks', () => {
+    const { lines } = simulate(
+      { candidates: 3, spread: 0.5, blockErrorK: 1, replicateSd: 0.03, plates: 3 },
+      randomStream(6),
+    );
+    const { shared, parts } = splitErrors(lines, REFERENCE_K);
+    expect(shared.sd).toBe(0);
+    expect(parts.map((part) => part!.own)).toEqual(lines.map((line) => line.error));
   });
 });
