@@ -10,6 +10,8 @@ import type { Scipy } from './scipy';
 const SERIES = 960;
 const READINGS = 40;
 const PAIRS = 15;
+/** Passes before anything is timed. */
+const WARM_UP = 80;
 /** Series of one pair with a slow reference. */
 const SLICE = 96;
 /** The engine's pass over a slice is short: it is timed over so many. */
@@ -21,7 +23,7 @@ const WANTED = { 3: { scipy: 150, floor: 4 }, 4: { scipy: 60, floor: 7 } } as co
 export async function benchOneCore(folder: string, scipy: Scipy | null): Promise<string[]> {
   const all = benchSeries(SERIES, READINGS);
   const prepared = prepare(all);
-  for (let i = 0; i < 20; i += 1) {
+  for (let i = 0; i < WARM_UP; i += 1) {
     fitAll(prepared, 3);
     fitAll(prepared, 4);
     floor(SERIES, 180);

@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process';
+import { existsSync } from 'node:fs';
 import { createInterface } from 'node:readline';
 import type { BenchSeries } from './benchSeries';
 
@@ -11,7 +12,9 @@ export interface Scipy {
 
 /** Starts Python with SciPy; null where it is not installed. */
 export async function startScipy(script: string): Promise<Scipy | null> {
-  const child = spawn('python3', [script], {
+  // Debian's own Python knows Debian's packages.
+  const python = existsSync('/usr/bin/python3') ? '/usr/bin/python3' : 'python3';
+  const child = spawn(python, [script], {
     stdio: ['pipe', 'pipe', 'ignore'],
     env: { ...process.env, OMP_NUM_THREADS: '1', OPENBLAS_NUM_THREADS: '1' },
   });

@@ -41,9 +41,8 @@ def fit_all(series, laws):
         c = c / c.max()
         n = len(t)
         for law, start in ((zero, (1, 0.8)), (first, (1, 1)), (second, (1, 1)), (saturating, (1, 1.2, 1)))[:laws]:
-            bounds = (1e-9, numpy.inf) if law is saturating else (-numpy.inf, numpy.inf)
             try:
-                best, covariance = curve_fit(law, t, c, p0=start, bounds=bounds, maxfev=2000)
+                best, covariance = curve_fit(law, t, c, p0=start, maxfev=2000)
             except RuntimeError:
                 continue
             rss = float(numpy.sum((c - law(t, *best)) ** 2))

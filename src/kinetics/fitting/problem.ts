@@ -19,7 +19,8 @@ export interface FitProblem {
   valueScale: number;
   /** Smallest scaled time above 0. */
   firstStep: number;
-  /** Σ(y − ȳ)² of the scaled readings. */
+  /** Σy² and Σ(y − ȳ)² of the scaled readings. */
+  squares: number;
   spread: number;
 }
 
@@ -80,6 +81,11 @@ export function scaleReadings(readings: Readings, kind: ReadingKind): FitProblem
     if (firstStep === 0 && since > 0) firstStep = since;
   }
   let spread = 0;
-  for (let i = 0; i < n; i += 1) spread += (y[i]! - sum / n) ** 2;
-  return { mode, t, y, originS, timeScale, valueScale, firstStep: firstStep || 1, spread };
+  let squares = 0;
+  for (let i = 0; i < n; i += 1) {
+    const distance = y[i]! - sum / n;
+    spread += distance * distance;
+    squares += y[i]! * y[i]!;
+  }
+  return { mode, t, y, originS, timeScale, valueScale, firstStep: firstStep || 1, squares, spread };
 }
