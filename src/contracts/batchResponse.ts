@@ -115,7 +115,8 @@ function fitsOf(fits: SeriesAnalysis['fits']): BatchSeriesResult['fits'] {
   return Object.fromEntries(Object.entries(fits).map(([name, fit]) => [name, fitOf(fit)]));
 }
 
-function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
+/** A well's result as the batch contract answers it. */
+export function batchSeriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
   const { dimension } = analysis;
   const order = analysis.apparentOrder;
   return {
@@ -143,7 +144,8 @@ function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
   };
 }
 
-function catalystResult(result: CatalystAnalysis): BatchCatalystResult {
+/** A catalyst's result as the batch contract answers it. */
+export function batchCatalyst(result: CatalystAnalysis): BatchCatalystResult {
   const kRef = result.kUnit === null ? null : withLimits(result.kRef, result.kUnit);
   const at = result.kRefTemperatureK;
   return {
@@ -167,7 +169,7 @@ function catalystResult(result: CatalystAnalysis): BatchCatalystResult {
 export function batchResponse(analysis: ScreenAnalysis): BatchResponse {
   return {
     engine: analysis.engine,
-    series: analysis.series.map(seriesResult),
-    catalysts: analysis.catalysts.map(catalystResult),
+    series: analysis.series.map(batchSeriesResult),
+    catalysts: analysis.catalysts.map(batchCatalyst),
   };
 }

@@ -38,14 +38,16 @@ export function analyseScreen(
  * What the wells of a screen come to: each after the blank, and every catalyst in the order of first
  * appearance.
  *
- * @param wells all of one screen; their `net` is filled in
+ * @param wells of one screen, catalysts whole; their `net` is filled in
+ * @param blankWells all blanks of that screen, where they are not among the wells
  */
 export function concludeScreen(
   wells: readonly AnalysedWell[],
   reference: ReferenceConditions,
+  blankWells: readonly AnalysedWell[] = wells.filter(({ series }) => BLANK.includes(series.role)),
 ): ScreenAnalysis {
-  const blanks = blankRates(wells.filter((well) => BLANK.includes(well.series.role)));
-  const models = blankModels(wells);
+  const blanks = blankRates(blankWells);
+  const models = blankModels(blankWells);
   for (const well of wells) {
     const model = models.get(well.analysis.dimension) ?? null;
     if (model === null || !RANKED.includes(well.series.role)) continue;
@@ -75,8 +77,7 @@ export function concludeScreen(
 }
 
 /** What goes on without the catalyst, for each dimension that has blanks. */
-function blankModels(wells: readonly AnalysedWell[]): Map<ReadingDimension, BlankModel> {
-  const blanks = wells.filter((well) => BLANK.includes(well.series.role));
+function blankModels(blanks: readonly AnalysedWell[]): Map<ReadingDimension, BlankModel> {
   const models = new Map<ReadingDimension, BlankModel>();
   for (const dimension of new Set(blanks.map(({ analysis }) => analysis.dimension))) {
     const model = blankModel(blanks, dimension);

@@ -3,8 +3,8 @@ import { resolve } from 'node:path';
 import { MessageChannel, type Transferable } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import { problems } from '../errors';
-import type { DecaySeries, ReferenceConditions, ScreenAnalysis } from '../kinetics/types';
-import type { Helper } from '../workers/sharedWells';
+import type { DecaySeries, ReferenceConditions } from '../kinetics/types';
+import type { Helper, WrittenScreen } from '../workers/shareParts';
 import type { ParsedWorkbook } from '../workbooks/types';
 
 export interface BatchAnswer {
@@ -25,7 +25,7 @@ export interface WorkerPools {
   analyseScreen(
     input: ScreenInput,
     onProgress: (done: number, total: number) => void,
-  ): Promise<ScreenAnalysis>;
+  ): Promise<WrittenScreen>;
   /** @throws Problem 422 when reading takes too long or too much memory. */
   readWorkbook(bytes: Uint8Array, fileName: string): Promise<ParsedWorkbook>;
   close(): Promise<void>;
@@ -100,7 +100,7 @@ export function openWorkerPools(folder: string, threads = availableParallelism()
     );
     for (const { other } of channels) {
       engine
-        .run(other, { filename: file('wells'), transferList: [other.port] })
+        .run(other, { filename: file('part'), transferList: [other.port] })
         // The thread that shares out fits what a lost helper leaves.
         .catch(() => undefined);
     }
@@ -121,7 +121,7 @@ export function openWorkerPools(folder: string, threads = availableParallelism()
       try {
         const large = input.series.length >= largeScreenWells;
         const task = { ...input, port: port2 };
-        return (await runShared('screen', task, [port2], large)) as ScreenAnalysis;
+        return (await runShared('screen', task, [port2], large)) as WrittenScreen;
       } finally {
         port1.close();
       }

@@ -1,9 +1,8 @@
 import { notJsonProblem, type BatchProblem } from '../contracts/batchProblem';
 import { parseBatchRequest } from '../contracts/batchRequest';
-import { batchResponse } from '../contracts/batchResponse';
 import { decaySeriesOf, referenceOf } from '../contracts/batchToEngine';
-import { concludeScreen } from '../kinetics/analyseScreen';
-import { analyseWellsShared, type Helper } from './sharedWells';
+import { ENGINE_VERSION } from '../kinetics/constants';
+import { analyseShared, type Helper } from './shareParts';
 
 /** An HTTP answer without the server around it. */
 export interface BatchAnswer {
@@ -37,7 +36,9 @@ export function answerBatch(bytes: Uint8Array, helpers: readonly Helper[] = []):
   const parsed = parseBatchRequest(document);
   if (!parsed.ok) return refuse(parsed.problem);
   const { series, reference } = parsed.request;
-  const wells = analyseWellsShared(series.map(decaySeriesOf), helpers);
-  const analysis = concludeScreen(wells, referenceOf(reference));
-  return writeJson(200, 'application/json', batchResponse(analysis));
+  const given = { form: 'batch' as const, reference: referenceOf(reference) };
+  const written = analyseShared(series.map(decaySeriesOf), given, helpers);
+  const list = (results: readonly { json: string }[]) => results.map(({ json }) => json).join(',');
+  const text = `{"engine":${JSON.stringify(ENGINE_VERSION)},"series":[${list(written.series)}],"catalysts":[${list(written.catalysts)}]}`;
+  return { status: 200, contentType: 'application/json', body: new TextEncoder().encode(text) };
 }

@@ -1,7 +1,6 @@
 import type { MessagePort } from 'node:worker_threads';
-import { concludeScreen } from '../kinetics/analyseScreen';
-import { analyseWellsShared, type Helper } from './sharedWells';
-import type { DecaySeries, ReferenceConditions, ScreenAnalysis } from '../kinetics/types';
+import type { DecaySeries, ReferenceConditions } from '../kinetics/types';
+import { analyseShared, type Helper, type WrittenScreen } from './shareParts';
 
 /** One stored screen and where to report progress. */
 export interface ScreenTask {
@@ -20,13 +19,12 @@ export function analyseScreenWithProgress({
   reference,
   port,
   helpers = [],
-}: ScreenTask): ScreenAnalysis {
+}: ScreenTask): WrittenScreen {
   const step = Math.max(1, Math.ceil(series.length / REPORTS));
   let reported = 0;
-  const wells = analyseWellsShared(series, helpers, (done, total) => {
+  return analyseShared(series, { form: 'screen', reference }, helpers, (done, total) => {
     if (port === undefined || (done - reported < step && done < total)) return;
     reported = done;
     port.postMessage({ done, total });
   });
-  return concludeScreen(wells, reference);
 }

@@ -1,5 +1,5 @@
 import { answerBatch, type BatchAnswer } from './analyseBatch';
-import { dismiss, type Helper } from './sharedWells';
+import { dismiss, type Helper } from './shareParts';
 
 /** One batch and the threads that help with it. */
 export interface BatchTask {

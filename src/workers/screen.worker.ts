@@ -1,9 +1,8 @@
-import type { ScreenAnalysis } from '../kinetics/types';
 import { analyseScreenWithProgress, type ScreenTask } from './analyseScreen';
-import { dismiss } from './sharedWells';
+import { dismiss, type WrittenScreen } from './shareParts';
 
 /** Analyses one stored screen in a thread of its own. */
-export default function runScreen(task: ScreenTask): ScreenAnalysis {
+export default function runScreen(task: ScreenTask): WrittenScreen {
   try {
     return analyseScreenWithProgress(task);
   } finally {
