@@ -30,6 +30,8 @@ type ToHelper = { setting: PartSetting } | { part: Part } | null;
 const PART_SIZE = 32;
 /** A helper silent for so long is given up; its part is analysed here. */
 const PATIENCE_MS = 60_000;
+/** How often a helper looks whether it may go. */
+const LOOK_MS = 100;
 /** Places in a helper's signal. */
 const MESSAGES = 0;
 const DISMISSED = 1;
@@ -141,23 +143,22 @@ export function help({ port, signal }: Helper): Promise<void> {
   };
   let analyse: ReturnType<typeof partAnalyser> | null = null;
   return new Promise((resolve) => {
-    // One that comes too late hears nothing of a port closed before.
-    if (Atomics.load(counter, DISMISSED) === 1) {
+    const leave = () => {
+      clearInterval(watch);
       port.close();
       resolve();
-      return;
-    }
-    port.on('close', resolve);
+    };
+    // A port that was closed before it came here says nothing of it.
+    const watch = setInterval(() => {
+      if (Atomics.load(counter, DISMISSED) === 1) leave();
+    }, LOOK_MS);
+    port.on('close', leave);
     port.on('message', (message: ToHelper) => {
-      if (message === null) {
-        port.close();
-        resolve();
-      } else if ('setting' in message) {
-        analyse = partAnalyser(message.setting);
-      } else if (analyse !== null) {
-        answer({ answer: analyse(message.part) });
-      }
+      if (message === null) leave();
+      else if ('setting' in message) analyse = partAnalyser(message.setting);
+      else if (analyse !== null) answer({ answer: analyse(message.part) });
     });
-    answer({ ready: true });
+    if (Atomics.load(counter, DISMISSED) === 1) leave();
+    else answer({ ready: true });
   });
 }

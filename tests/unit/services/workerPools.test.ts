@@ -1,5 +1,4 @@
-import { mkdtempSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openWorkerPools, type WorkerPools } from '@/services/workerPools';
@@ -49,7 +48,9 @@ describe('threads that share a screen', { timeout: 60_000 }, () => {
   let folder: string;
   let [alone, together]: WorkerPools[] = [];
   beforeAll(async () => {
-    folder = mkdtempSync(join(tmpdir(), 'ratewell-workers-'));
+    // Inside the checkout, where the bundles find their packages.
+    mkdirSync('.data', { recursive: true });
+    folder = mkdtempSync(join('.data', 'workers-'));
     await buildWorkers(folder);
     alone = openWorkerPools(join(folder, 'workers'), 1);
     together = openWorkerPools(join(folder, 'workers'), 3);
