@@ -10,7 +10,7 @@ import {
 import { findCampaign, listCatalysts } from '../db/repositories/campaigns';
 import { findScreen, listWells } from '../db/repositories/screens';
 import type { ReferenceConditions } from '../kinetics/types';
-import type { WrittenScreen } from '../workers/shareParts';
+import type { WrittenScreen } from '../workers/gatherParts';
 import { decaySeriesOfScreen } from './decaySeries';
 import type { WorkerPools } from './workerPools';
 

@@ -1,11 +1,12 @@
 import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
-import { MessageChannel, type Transferable } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import { problems } from '../errors';
 import type { DecaySeries, ReferenceConditions } from '../kinetics/types';
-import type { Helper, WrittenScreen } from '../workers/shareParts';
 import type { ParsedWorkbook } from '../workbooks/types';
+import { blanksOf, divide, type PartAnswer, type PartSetting } from '../workers/answerPart';
+import type { OpenedBatch } from '../workers/batch.worker';
+import { gatherParts, type WrittenScreen } from '../workers/gatherParts';
 
 export interface BatchAnswer {
   status: number;
@@ -34,9 +35,11 @@ export interface WorkerPools {
 const workbookSeconds = 60;
 const workbookMegabytes = 512;
 const waitingBatches = 32;
-/** From these sizes on several threads share the work. */
+/** From this size on several threads share a batch, each some parts of it. */
 const largeBatchBytes = 250_000;
-const largeScreenWells = 200;
+const partsOfAThread = 4;
+/** Wells of a screen that one thread takes at a time. */
+const partSize = 64;
 
 function workbookTooHeavy(cause: unknown) {
   return problems.workbookFaults(
@@ -55,6 +58,25 @@ function workbookTooHeavy(cause: unknown) {
     ],
     1,
   );
+}
+
+/** Does work on each item, at most `atATime` under way; answers in the order of the items. */
+async function inTurn<T, R>(
+  items: readonly T[],
+  atATime: number,
+  work: (item: T) => Promise<R>,
+): Promise<R[]> {
+  const answers = new Array<R>(items.length);
+  let next = 0;
+  const lane = async () => {
+    while (next < items.length) {
+      const i = next;
+      next += 1;
+      answers[i] = await work(items[i]!);
+    }
+  };
+  await Promise.all(Array.from({ length: Math.min(atATime, items.length) }, lane));
+  return answers;
 }
 
 /**
@@ -78,53 +100,48 @@ export function openWorkerPools(folder: string, threads = availableParallelism()
     resourceLimits: { maxOldGenerationSizeMb: workbookMegabytes },
   });
 
-  /**
-   * Runs a task that may have helpers: the task first, so that no thread waits for one that is not
-   * there yet. A helper that comes too late goes again.
-   */
-  const runShared = (
-    name: string,
-    task: object,
-    transferList: Transferable[],
-    large: boolean,
-  ): Promise<unknown> => {
-    const channels = Array.from({ length: large ? threads - 1 : 0 }, () => {
-      const { port1, port2 } = new MessageChannel();
-      const signal = new SharedArrayBuffer(8);
-      return { own: { port: port1, signal }, other: { port: port2, signal } };
-    });
-    const helpers: Helper[] = channels.map(({ own }) => own);
-    const running = engine.run(
-      { ...task, helpers },
-      { filename: file(name), transferList: [...transferList, ...helpers.map(({ port }) => port)] },
-    );
-    for (const { other } of channels) {
-      engine
-        .run(other, { filename: file('part'), transferList: [other.port] })
-        // The thread that shares out fits what a lost helper leaves.
-        .catch(() => undefined);
-    }
-    return running;
-  };
+  const part = { filename: file('part') };
+  const batch = { filename: file('batch') };
 
   return {
     async answerBatch(bytes) {
       if (engine.queueSize >= waitingBatches) throw problems.busy();
-      const large = bytes.byteLength >= largeBatchBytes;
-      return (await runShared('batch', { bytes }, [bytes.buffer], large)) as BatchAnswer;
-    },
-    async analyseScreen(input, onProgress) {
-      const { port1, port2 } = new MessageChannel();
-      port1.on('message', (message: { done: number; total: number }) => {
-        onProgress(message.done, message.total);
-      });
-      try {
-        const large = input.series.length >= largeScreenWells;
-        const task = { ...input, port: port2 };
-        return (await runShared('screen', task, [port2], large)) as WrittenScreen;
-      } finally {
-        port1.close();
+      if (bytes.byteLength < largeBatchBytes || threads < 2) {
+        return (await engine.run(bytes, { ...batch, transferList: [bytes.buffer] })) as BatchAnswer;
       }
+      const opened = (await engine.run(
+        { bytes, parts: threads * partsOfAThread },
+        { ...batch, name: 'open', transferList: [bytes.buffer] },
+      )) as OpenedBatch;
+      if ('refusal' in opened) return opened.refusal;
+      const answers = await inTurn(opened.parts, threads, async (packed) => {
+        const options = {
+          ...part,
+          name: 'runPacked',
+          transferList: [packed.buffer as ArrayBuffer],
+        };
+        return (await engine.run(packed, options)) as Uint8Array;
+      });
+      return (await engine.run(
+        { wells: opened.wells, answers },
+        {
+          ...batch,
+          name: 'close',
+          transferList: answers.map(({ buffer }) => buffer as ArrayBuffer),
+        },
+      )) as BatchAnswer;
+    },
+    async analyseScreen({ series, reference }, onProgress) {
+      const total = series.length;
+      const setting: PartSetting = { form: 'screen', reference, blanks: blanksOf(series) };
+      let done = 0;
+      const answers = await inTurn(divide(series, partSize), threads, async (one) => {
+        const answer = (await engine.run({ setting, part: one }, part)) as PartAnswer;
+        done += one.places.length;
+        onProgress(done, total);
+        return answer;
+      });
+      return gatherParts(total, answers);
     },
     async readWorkbook(bytes, fileName) {
       try {

@@ -1,23 +1,33 @@
-import { move, transferableSymbol, valueSymbol } from 'piscina';
-import { answerBatch, type BatchAnswer } from './analyseBatch';
-import { dismiss, type Helper } from './shareParts';
+import { deserialize, serialize } from 'node:v8';
+import { answerBatch, openBatch, writeAnswer, type BatchAnswer } from './analyseBatch';
+import type { PartAnswer } from './answerPart';
+import { handOver, ownBuffer } from './handOver';
 
-/** One batch and the threads that help with it. */
-export interface BatchTask {
-  bytes: Uint8Array;
-  helpers?: Helper[];
+const answered = (answer: BatchAnswer) => handOver(answer, [answer.body]);
+
+/** Answers one batch in a thread of its own. */
+export default function runBatch(bytes: Uint8Array): BatchAnswer {
+  return answered(answerBatch(bytes));
 }
 
-/** Answers one batch in a thread of its own; the bytes of the answer are handed over, not copied. */
-export default function runBatch({ bytes, helpers = [] }: BatchTask): BatchAnswer {
-  try {
-    const answer = answerBatch(bytes, helpers);
-    return move({
-      ...answer,
-      [transferableSymbol]: answer.body.buffer,
-      [valueSymbol]: answer,
-    }) as unknown as BatchAnswer;
-  } finally {
-    dismiss(helpers);
-  }
+/** A large batch, checked and divided: packed parts for `part.worker`, or the refusal. */
+export type OpenedBatch = { refusal: BatchAnswer } | { wells: number; parts: Uint8Array[] };
+
+/** Parses, checks and divides a large batch into about so many parts. */
+export function open({ bytes, parts }: { bytes: Uint8Array; parts: number }): OpenedBatch {
+  const opened = openBatch(bytes);
+  if ('refusal' in opened) return opened;
+  const { setting, wells } = opened;
+  const packed = opened.divide(parts).map((part) => ownBuffer(serialize({ setting, part })));
+  return handOver({ wells, parts: packed }, packed);
+}
+
+/** Puts the packed answers to all parts together. */
+export function close({ wells, answers }: { wells: number; answers: Uint8Array[] }): BatchAnswer {
+  return answered(
+    writeAnswer(
+      wells,
+      answers.map((bytes) => deserialize(bytes) as PartAnswer),
+    ),
+  );
 }
