@@ -255,6 +255,16 @@ export interface Adsorption {
   enthalpy: Estimate | null;
 }
 
+/** Apparent activation parameters of a first-order constant per site. */
+export interface ActivationParameters {
+  /** ΔH‡, J/mol. */
+  enthalpy: Estimate;
+  /** ΔS‡, J mol⁻¹ K⁻¹, standard state 1 mol/L. */
+  entropy: Estimate;
+  /** K, where both hold. */
+  temperatureK: number;
+}
+
 /** The engine's answer for one catalyst over all its wells. */
 export interface CatalystAnalysis {
   catalyst: string;
@@ -282,6 +292,8 @@ export interface CatalystAnalysis {
   timeToTarget: Estimate | null;
   /** Null unless the saturating law holds and K is known. */
   adsorption: Adsorption | null;
+  /** Null unless first order, with known loading and site density. */
+  eyring: ActivationParameters | null;
   /** True when rateRef and timeToTarget are brackets between orders 0 and 2. */
   bracket: boolean;
   /** g/L that k was brought to; null when per well. */
