@@ -74,6 +74,11 @@ export function analyseCatalyst(
   if (pooled.length > 0) {
     warnings.push(...loading.warnings);
     basis = describeBasis(decided, pooled, dimension, reference, model, loading.loadingGPerL);
+    if (pooled.some(({ series }) => series.level === true)) {
+      // What stays is not known at the reference, so neither are rate and time.
+      basis = { ...basis, rateRef: null, timeToTarget: null, bracket: false };
+      warnings.push('level-by-request');
+    }
     warnings.push(...warnOfTemperatures(pooled, basis.arrhenius, reference));
     if (blanksReact(blanks, pooled)) {
       warnings.push(basis.net ? 'blank-subtracted' : 'blank-reacts');

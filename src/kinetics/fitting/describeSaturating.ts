@@ -86,6 +86,7 @@ export function describeSaturating(
       residualSd: dof > 0 ? finiteOrNull(Math.sqrt(rss / dof)) : null,
       dof,
       saturation: constants.saturation,
+      level: null,
     },
     initialRate: {
       value: first.c0 * first.kRel,

@@ -180,6 +180,7 @@ describe('whatever comes', { timeout: 30_000 }, () => {
       initialConcentration: fc.constantFrom(null, 0.01, 1e-300, 1e300),
       loadingGPerL: fc.constantFrom(null, 2.5, 1e-300),
       siteDensityMolPerKg: fc.constantFrom(null, 0.05),
+      level: fc.boolean(),
     })
     .map(
       ({
