@@ -1,3 +1,4 @@
+import { profileRateConstant } from './fitting/profileInterval';
 import type { Readings } from './fitting/readings';
 import { collectReadings, resultDimension } from './fitting/readings';
 import { requestedLaw } from './rateLaws/registry';
@@ -209,7 +210,7 @@ function describeReactingWell(
   const rates = fits.laws
     .filter((fitted) => fitted.name !== 'order')
     .map((fitted) => ({ ...fitted.initialRate, criterion: fitted.criterion }));
-  const k = isAsserted ? estimate(fit.k, fit.kSe, fit.dof) : null;
+  const k = isAsserted ? rateConstantOf(shown) : null;
   return {
     ...blank,
     verdict: isForced ? 'forced' : misses ? 'other' : selection.verdict,
@@ -234,6 +235,19 @@ function describeReactingWell(
     lackOfFit,
     outliers,
     warnings,
+  };
+}
+
+/** k with its interval: by profile where the plain one misleads. */
+function rateConstantOf({ fit, relative }: FittedLaw): Estimate | null {
+  const plain = estimate(fit.k, fit.kSe, fit.dof);
+  if (plain?.se == null || relative === null || !(plain.value > 0)) return plain;
+  const profile = profileRateConstant(relative, plain.se / plain.value);
+  if (profile === null) return plain;
+  return {
+    ...plain,
+    low: plain.value * profile.low,
+    high: profile.high === null ? null : finiteOrNull(plain.value * profile.high),
   };
 }
 
