@@ -42,6 +42,8 @@ const WARNINGS: Record<WarningCode, string> = {
     'Different temperatures assert different orders, as when coverage of the surface changes; one activation energy would mix two regimes, so look at the temperatures apart.',
   'arrhenius-curved':
     'The Arrhenius plot bends; transport, loss of activity or a second path may take over at one end: fit the straight part, and vary stirring and catalyst mass.',
+  'one-step-disagrees':
+    'The fit of all readings at once gives another activation energy than the line through the single wells; look for wells that the law or the line misses.',
   'low-activation-energy':
     'The apparent activation energy is below 20 kJ/mol, as when transport to the particle sets the rate; vary stirring and particle size before reading chemistry into it.',
   'negative-activation-energy':
