@@ -23,9 +23,11 @@ export interface OneStepLaw {
   curve(lnConstants: readonly number[], lnC: number): (timeS: number) => RelativePoint;
 }
 
-/** −dC/dt = k Cⁿ: u = k C0^(n−1) t, and g follows from u alone. */
+/** −dC/dt = k Cⁿ: u = k C0^(n−1) t, g follows from u alone, and g' = −gⁿ. */
 export function oneStepOrder(law: RateLaw): OneStepLaw {
-  const e = law.order - 1;
+  const n = law.order;
+  const e = n - 1;
+  const slopeOf = (g: number) => (n === 1 ? -g : n === 2 ? -g * g : -(g ** n));
   return {
     constants: 1,
     curve([lnK], lnC) {
@@ -33,8 +35,10 @@ export function oneStepOrder(law: RateLaw): OneStepLaw {
       const point: RelativePoint = { g: 1, byConstant: [0], byLnC: 0 };
       return (timeS) => {
         const u = kRel * timeS;
-        const rise = u === 0 ? 0 : u * law.slope(u);
-        point.g = law.relative(u);
+        const g = law.relative(u);
+        // An infinite u has used everything up; a negative power of 0 is no slope.
+        const rise = u > 0 && g > 0 ? u * (n === 0 ? -1 : slopeOf(g)) : 0;
+        point.g = g;
         point.byConstant[0] = rise;
         point.byLnC = e * rise;
         return point;

@@ -20,8 +20,11 @@ export interface OneStepSolution {
 
 const MOST_STEPS = 60;
 const MOST_DAMPING = 1e10;
-/** Squared step in units of its own error at which the search has settled. */
-const SETTLED = 1e-16;
+/** Squared step in units of its own error that is the last one worth taking. */
+const SETTLED = 1e-9;
+/** The same for short steps: the end of a zero order is a kink, into which they creep. */
+const CREEPING = 1e-3;
+const CREEPING_DAMPING = 1;
 
 /** The well's share of the normal equations once its amplitude is eliminated. */
 function eliminate({ shared, cross, own, sharedRight, ownRight }: WellTerms, damping: number) {
@@ -95,7 +98,8 @@ export function solveOneStep(
             state.shared.map((value, i) => value + move.shared[i]!),
             state.lnAmplitudes.map((value, i) => value + move.lnAmplitudes[i]!),
           );
-    const settled = move !== null && move.size <= SETTLED * noise();
+    const creeps = damping >= CREEPING_DAMPING;
+    const settled = move !== null && move.size <= (creeps ? CREEPING : SETTLED) * noise();
     if (next !== null && next.chi2 <= state.chi2) {
       state = next;
       damping = damping > 1e-8 ? damping / 10 : 0;
