@@ -12,8 +12,6 @@ import {
   volumeUnits,
 } from '../kinetics/units';
 
-const NOT_YET = 'This version of the engine does not have it yet';
-
 const known = (name: string, units: readonly string[]) =>
   `${name} is not known here; use one of ${units.join(', ')}`;
 
@@ -48,9 +46,7 @@ const law = z.union(
   },
 );
 
-const flagNotYet = z
-  .boolean({ error: 'Must be true or false' })
-  .refine((value) => !value, { error: `${NOT_YET}: leave it out or send false` });
+const flag = z.boolean({ error: 'Must be true or false' });
 
 /** What readings of one kind need besides; taken beside the reading or inside it. */
 const kindOptions = {
@@ -59,7 +55,7 @@ const kindOptions = {
   /** C0 of `conversion` readings. */
   initialConcentration: concentration.optional(),
   /** Fits a baseline under a `signal`. */
-  baseline: flagNotYet.optional(),
+  baseline: flag.optional(),
 };
 
 /** One well of a batch. */
@@ -106,7 +102,7 @@ export const batchSeriesSchema = z.strictObject(
     nu: positive.optional(),
     law: law.optional(),
     /** Fits a level that stays. */
-    residual: flagNotYet.optional(),
+    residual: flag.optional(),
     ...kindOptions,
   },
   { error: 'Must be an object' },

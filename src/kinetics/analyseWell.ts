@@ -63,12 +63,11 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   }
 
   const fits = fitWell(series, readings, forced);
-  const first = fits.laws.find((fitted) => fitted.law?.order === 1)!;
   const decay = testForDecay(
     readings,
     series.kind,
-    first.relative!.rss,
-    first.relative!.kRel === null || first.relative!.kRel > 0,
+    fits.plainFirst.rss,
+    fits.plainFirst.kRel === null || fits.plainFirst.kRel > 0,
   );
   if (decay.outcome !== 'decays') return describeDeadWell(series, readings, blank, fits, decay);
 
@@ -118,6 +117,7 @@ function emptyAnalysis(series: DecaySeries, readings: Readings): SeriesAnalysis 
     kRel: null,
     adsorptionConstant: null,
     c0: null,
+    level: null,
     conversion: null,
     initialRate: null,
     net: null,
@@ -189,6 +189,7 @@ function describeReactingWell(
   const { fit, initialRate } = shown;
   const warnings: WarningCode[] = [...blank.warnings];
   if (!isForced) warnings.push(...selection.warnings);
+  if (series.level === true) warnings.push('level-by-request');
   if (misses) warnings.push('no-simple-order');
   if (lackOfFit.significant) warnings.push('lack-of-fit');
   if (
@@ -221,6 +222,7 @@ function describeReactingWell(
         : null,
     kRel: isAsserted ? estimate(fit.kRel, fit.kRelSe, fit.dof) : null,
     c0: estimate(fit.c0, fit.c0Se, fit.dof),
+    level: fit.level === null ? null : estimate(fit.level.value, fit.level.se, fit.dof),
     conversion: shown.conversion,
     initialRate: isAsserted
       ? estimate(initialRate.value, initialRate.se, fit.dof)

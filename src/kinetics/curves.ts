@@ -35,6 +35,7 @@ export function evaluateFit(
   const factor = owner.kind === 'product' ? owner.productPerReactant : 1;
   const curve = curveOf(name, owner.order, fit);
   if (curve === null) return null;
+  if (fit.level !== null && fit.kRel !== null) return leveledCurve(curve, growing, fit, timesS);
   if (fit.kRel === null) return straightGrowth(fit, factor, timesS);
   const amplitude = owner.kind === 'conversion' ? 1 : fit.c0;
   if (amplitude === null) return null;
@@ -58,6 +59,33 @@ export function evaluateFit(
     half.push(t === null || variance === null ? null : t * factor * Math.sqrt(variance));
   }
   return banded(values, half);
+}
+
+/** A curve that approaches a level, in the unit of the readings. */
+function leveledCurve(
+  curve: (sinceS: number) => CurvePoint,
+  growing: boolean,
+  fit: LawFit,
+  timesS: readonly number[],
+): BandedCurve {
+  const { amplitude, offset, covariance } = fit.level!;
+  const t = fit.dof > 0 ? intervalFactor(fit.dof) : null;
+  const sign = growing ? -1 : 1;
+  const points = timesS.map((time) =>
+    curve(growing ? Math.max(time - fit.originS, 0) : time - fit.originS),
+  );
+  const shapes = points.map((at) => (growing ? at.converted : at.relative));
+  return banded(
+    shapes.map((shape) => amplitude * shape + offset),
+    points.map((at, i) =>
+      t === null || covariance === null
+        ? null
+        : t *
+          Math.sqrt(
+            quadratic([shapes[i]!, sign * amplitude * at.byRate, growing ? 0 : 1], covariance),
+          ),
+    ),
+  );
 }
 
 /** C/c0 at a time after the fit's origin, with its derivatives. */

@@ -62,6 +62,8 @@ const WARNINGS: Record<WarningCode, string> = {
     'The blank reacts too; its rate was taken off, so figures are the catalyst’s own, but for the time to target, in which both work together.',
   'not-above-blank':
     'After the blank is taken off no rate is left; raise the loading, or find what reacts in the blank.',
+  'level-by-request':
+    'A level that stays was fitted as asked; k is that of the approach to it. Ask whether it is an inert remainder, an equilibrium or a baseline: time and rate at the reference are not given.',
   'extrapolated-temperature':
     'The reference temperature lies outside the measured ones, so figures there rest on the line alone; measure closer to it.',
   'extrapolated-concentration':

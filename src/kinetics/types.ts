@@ -59,6 +59,8 @@ export interface DecaySeries {
   /** Stoichiometric coefficient of the reactant followed, above 0. */
   nu: number;
   law: LawRequest;
+  /** Fits a level that stays: C∞, or the baseline of a signal. */
+  level?: boolean;
 }
 
 /** A number with its 95 % interval; null where it cannot be given. */
@@ -78,6 +80,18 @@ export interface SaturatingConstants {
   coverage: number;
   coverageSe: number | null;
   /** Of (c0, kRel, coverage), row by row; null at a limit of the law. */
+  covariance: number[] | null;
+}
+
+/** A level that the curve approaches instead of 0. */
+export interface FittedLevel {
+  /** C∞, or the baseline of a signal, base unit; null for product, which does not tell it. */
+  value: number | null;
+  se: number | null;
+  /** The curve, in the unit of the readings: amplitude × shape + offset. */
+  amplitude: number;
+  offset: number;
+  /** Of (amplitude, kRel, offset), row by row. */
   covariance: number[] | null;
 }
 
@@ -109,6 +123,8 @@ export interface LawFit {
   dof: number;
   /** Null for every law but the saturating one. */
   saturation: SaturatingConstants | null;
+  /** Null unless a level that stays, or a baseline, was asked for. */
+  level: FittedLevel | null;
 }
 
 /** Evidence that the best law still misses the readings. */
@@ -151,6 +167,7 @@ export type WarningCode =
   | 'blank-reacts'
   | 'blank-subtracted'
   | 'not-above-blank'
+  | 'level-by-request'
   | 'extrapolated-temperature'
   | 'extrapolated-concentration'
   | 'few-wells'
@@ -188,6 +205,8 @@ export interface SeriesAnalysis {
   adsorptionConstant: Estimate | null;
   /** Base unit. */
   c0: Estimate | null;
+  /** C∞ or baseline, base unit; only where it was asked for. */
+  level: Estimate | null;
   /** 1 − C_fit(t_last)/C_fit(t_first), not clamped; null when unusable. */
   conversion: number | null;
   /** Base unit s⁻¹ at the first reading; kept for undetermined wells too. */
@@ -281,6 +300,16 @@ export interface OneStep {
   disagreesWithTwoStep: boolean;
 }
 
+/** Apparent activation parameters of a first-order constant per site. */
+export interface ActivationParameters {
+  /** ΔH‡, J/mol. */
+  enthalpy: Estimate;
+  /** ΔS‡, J mol⁻¹ K⁻¹, standard state 1 mol/L. */
+  entropy: Estimate;
+  /** K, where both hold. */
+  temperatureK: number;
+}
+
 /** The engine's answer for one catalyst over all its wells. */
 export interface CatalystAnalysis {
   catalyst: string;
@@ -308,6 +337,8 @@ export interface CatalystAnalysis {
   timeToTarget: Estimate | null;
   /** Null unless the saturating law holds and K is known. */
   adsorption: Adsorption | null;
+  /** Null unless first order, with known loading and site density. */
+  eyring: ActivationParameters | null;
   /** True when rateRef and timeToTarget are brackets between orders 0 and 2. */
   bracket: boolean;
   /** g/L that k was brought to; null when per well. */

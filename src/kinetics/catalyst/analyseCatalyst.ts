@@ -10,6 +10,7 @@ import type {
   Verdict,
   WarningCode,
 } from '../types';
+import { activationParameters } from './eyring';
 import type { BlankModel } from '../blanks/blankModel';
 import { blanksReact, type BlankRate } from './blanksReact';
 import { fitOneStep } from './fitOneStep';
@@ -74,6 +75,11 @@ export function analyseCatalyst(
   if (pooled.length > 0) {
     warnings.push(...loading.warnings);
     basis = describeBasis(decided, pooled, dimension, reference, model, loading.loadingGPerL);
+    if (pooled.some(({ series }) => series.level === true)) {
+      // What stays is not known at the reference, so neither are rate and time.
+      basis = { ...basis, rateRef: null, timeToTarget: null, bracket: false };
+      warnings.push('level-by-request');
+    }
     warnings.push(...warnOfTemperatures(pooled, basis.arrhenius, reference));
     if (blanksReact(blanks, pooled)) {
       warnings.push(basis.net ? 'blank-subtracted' : 'blank-reacts');
@@ -101,6 +107,7 @@ export function analyseCatalyst(
     ...figures,
     rateRefPerMass,
     turnoverFrequency: perSite(rateRefPerMass, pooled),
+    eyring: decided.law === 'first' ? perSiteActivation(basis, loading.loadingGPerL, pooled) : null,
     loadingGPerL: pooled.length > 0 ? loading.loadingGPerL : null,
     conversion: largest(same.map((well) => well.analysis.conversion)),
     relativeResidualSd: relativeResidualSd(fits),
@@ -197,11 +204,28 @@ function perMass(rate: CatalystAnalysis['rateRef'], loadingGPerL: number | null)
   return loadingGPerL === null ? null : scaled(rate, 1000 / loadingGPerL);
 }
 
+/** ΔH‡ and ΔS‡ of k over the sites at the pooled loading. */
+function perSiteActivation(
+  { arrhenius, kRef }: BasisResult,
+  loadingGPerL: number | null,
+  wells: readonly PooledWell[],
+): CatalystAnalysis['eyring'] {
+  const density = siteDensityOf(wells);
+  if (arrhenius === null || kRef === null || loadingGPerL === null || density === null) return null;
+  return activationParameters(arrhenius, (loadingGPerL * density) / 1000);
+}
+
+function siteDensityOf(wells: readonly PooledWell[]): number | null {
+  return (
+    wells.find(({ series }) => (series.siteDensityMolPerKg ?? 0) > 0)?.series.siteDensityMolPerKg ??
+    null
+  );
+}
+
 /** Per active site, as a rate of reaction: the coefficient of the reactant divides. */
 function perSite(rate: CatalystAnalysis['rateRef'], wells: readonly PooledWell[]) {
-  const series = wells.find((well) => well.series.siteDensityMolPerKg !== null)?.series;
-  if (series === undefined || !(series.siteDensityMolPerKg! > 0)) return null;
-  return scaled(rate, 1 / (series.siteDensityMolPerKg! * series.nu));
+  const density = siteDensityOf(wells);
+  return density === null ? null : scaled(rate, 1 / (density * wells[0]!.series.nu));
 }
 
 function scaled(rate: CatalystAnalysis['rateRef'], factor: number): CatalystAnalysis['rateRef'] {

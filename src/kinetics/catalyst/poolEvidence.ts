@@ -69,7 +69,13 @@ function sumEvidence(wells: readonly JudgedWell[]): Evidence {
     );
     rivals[name] = best.aicc - gain + charge;
   }
-  return { laws, rivals, rivalCharge: 0, coverage: poolCoverage(wells) };
+  return {
+    laws,
+    rivals,
+    rivalCharge: 0,
+    coverage: poolCoverage(wells),
+    withLevel: wells.every(({ evidence }) => evidence.withLevel === true),
+  };
 }
 
 /** Inside the law when the intervals of two wells are, or that of the only one. */

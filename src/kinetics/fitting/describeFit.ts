@@ -85,6 +85,7 @@ export function describeFit(
       residualSd: residualSdOf(fit),
       dof: fit.dof,
       saturation: null,
+      level: null,
     },
     initialRate: {
       value: -scale * amplitude * kRel * slope,
@@ -140,6 +141,7 @@ function describeGrowth(
       residualSd: residualSdOf(fit),
       dof: fit.dof,
       saturation: null,
+      level: null,
     },
     initialRate: { value: rate, se },
     firstConcentration: null,

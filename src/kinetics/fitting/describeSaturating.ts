@@ -60,7 +60,7 @@ export function describeSaturating(
   const fixed = problem.mode === 'fraction';
   const parameters = fixed ? 2 : 3;
   const dof = n - parameters;
-  const rss = fit.rss * problem.valueScale ** 2;
+  const rss = fit.rss * problem.valueScale * problem.valueScale;
   const perAmplitude = concentrationPerAmplitude(series);
   const known = perAmplitude !== null;
   const origin = momentOfFit(fit, problem, perAmplitude ?? 1, dof);
@@ -86,6 +86,7 @@ export function describeSaturating(
       residualSd: dof > 0 ? finiteOrNull(Math.sqrt(rss / dof)) : null,
       dof,
       saturation: constants.saturation,
+      level: null,
     },
     initialRate: {
       value: first.c0 * first.kRel,

@@ -1,13 +1,20 @@
 import { fitApparentOrder, type ApparentOrderFit } from '../fitting/fitApparentOrder';
 import { fitDepartures } from '../fitting/fitDepartures';
 import type { RelativeFit } from '../fitting/fitLaw';
-import { scaleReadings } from '../fitting/problem';
+import { scaleReadings, type FitProblem } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
 import { rateLaws, type RequestedLaw } from '../rateLaws/registry';
 import { aicc, akaikeWeights } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
 import type { DecaySeries, LawFit, RateLawName } from '../types';
-import { fitOrder, fitSaturation, leastRss, type FittedLaw, type FittedOrder } from './fittedLaw';
+import {
+  fitOrder,
+  fitOrderWithLevel,
+  fitSaturation,
+  leastRss,
+  type FittedLaw,
+  type FittedOrder,
+} from './fittedLaw';
 import type { Evidence } from './selectRateLaw';
 
 /** Everything fitted to one well. */
@@ -23,6 +30,8 @@ export interface WellFits {
   exact: boolean;
   /** Size of the readings. */
   unit: number;
+  /** First order without a level, for the test of whether there is any decay. */
+  plainFirst: RelativeFit;
 }
 
 const FEWEST_FOR_ORDERS = 5;
@@ -69,7 +78,7 @@ export function fitWell(
   for (const fitted of laws) byName[fitted.name] = fitted.fit;
 
   const apparentOrder = fitApparentOrder(orders.map((fitted) => fitted.relative));
-  return {
+  const plain: WellFits = {
     laws,
     byName,
     apparentOrder,
@@ -79,6 +88,54 @@ export function fitWell(
         : null,
     exact: tried.some((fitted) => fitted.fit.rss <= leastRss(problem)),
     unit: problem.valueScale,
+    plainFirst: byOrder(1),
+  };
+  return series.level === true ? withLevel(plain, problem, series, readings, forced) : plain;
+}
+
+/**
+ * Fits the laws that have an order with a level that stays. Without a free order beside it the choice
+ * between them rests on their evidence alone, at ten times the usual ratio.
+ *
+ * @param plain the same well's fits without a level, which stand in where no approach is found
+ */
+function withLevel(
+  plain: WellFits,
+  problem: FitProblem,
+  series: DecaySeries,
+  readings: Readings,
+  forced: RequestedLaw | null,
+): WellFits {
+  const wanted = forced?.law != null && !rateLaws.includes(forced.law) ? [forced.law] : [];
+  const fitted = [...rateLaws, ...wanted].flatMap(
+    (law) => fitOrderWithLevel(problem, law, series, readings) ?? [],
+  );
+  if (fitted.length < rateLaws.length) return plain;
+  const tried = fitted.slice(0, rateLaws.length);
+  const weights = akaikeWeights(tried.map(({ criterion }) => criterion));
+  const weighed = readings.values.length >= FEWEST_FOR_SATURATION;
+  tried.forEach(({ fit }, i) => (fit.weight = weighed ? weights[i]! : null));
+  const byName: WellFits['byName'] = {};
+  for (const { name, fit } of fitted) byName[name] = fit;
+  return {
+    ...plain,
+    laws: fitted,
+    byName,
+    apparentOrder: null,
+    evidence: !weighed
+      ? null
+      : {
+          laws: tried.map(({ name, law, criterion }) => ({
+            name,
+            order: law!.order,
+            aicc: criterion,
+          })),
+          rivals: {},
+          rivalCharge: 0,
+          coverage: null,
+          withLevel: true,
+        },
+    exact: tried.some(({ fit }) => fit.rss <= leastRss(problem)),
   };
 }
 

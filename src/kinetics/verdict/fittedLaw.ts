@@ -1,5 +1,7 @@
 import { describeFit, type DescribedFit } from '../fitting/describeFit';
 import { describeSaturating } from '../fitting/describeSaturating';
+import { describeLevel } from '../fitting/describeLevel';
+import { fitLevel, levelLeverages, levelResiduals, type LevelFit } from '../fitting/fitLevel';
 import { fitLaw, leveragesOf, residualsOf, type RelativeFit } from '../fitting/fitLaw';
 import {
   fitSaturating,
@@ -27,6 +29,8 @@ export interface FittedLaw extends DescribedFit {
   relative: RelativeFit | null;
   /** The fit of the saturating law. */
   saturating: SaturatingFit | null;
+  /** The fit of a law that approaches a level. */
+  leveled: LevelFit | null;
 }
 
 /** A fitted law that has an order. */
@@ -53,6 +57,7 @@ export function fitOrder(
     law,
     relative,
     saturating: null,
+    leveled: null,
   };
 }
 
@@ -85,6 +90,33 @@ export function fitSaturation(
     law: null,
     relative: null,
     saturating,
+    leveled: null,
+  };
+}
+
+/**
+ * Fits a law that has an order and approaches a level that stays.
+ *
+ * @returns null where no approach can be told from a level alone
+ */
+export function fitOrderWithLevel(
+  problem: FitProblem,
+  law: RateLaw,
+  series: DecaySeries,
+  readings: Readings,
+): FittedLaw | null {
+  const leveled = fitLevel(problem, law);
+  if (leveled === null) return null;
+  return {
+    ...describeLevel(leveled, series, readings),
+    name: law.name,
+    parameters: leveled.parameters,
+    criterion: criterionOf(problem, leveled.rss, leveled.parameters),
+    problem,
+    law,
+    relative: null,
+    saturating: null,
+    leveled,
   };
 }
 
@@ -108,13 +140,20 @@ const scaled = ({ kRel, rss }: RelativeFit, { timeScale, valueScale }: FitProble
 });
 
 /** Readings less the curve, in the reading's base unit, in time order. */
-export function residualsOfLaw({ problem, relative, saturating }: FittedLaw): number[] {
+export function residualsOfLaw({ problem, relative, saturating, leveled }: FittedLaw): number[] {
+  if (leveled !== null) return levelResiduals(leveled);
   if (relative !== null) return residualsOf(relative);
   return saturating === null ? [] : saturatingResiduals(problem, saturating);
 }
 
 /** Diagonal of the hat matrix, in time order; null where the Jacobian is singular. */
-export function leveragesOfLaw({ problem, relative, saturating }: FittedLaw): number[] | null {
+export function leveragesOfLaw({
+  problem,
+  relative,
+  saturating,
+  leveled,
+}: FittedLaw): number[] | null {
+  if (leveled !== null) return levelLeverages(leveled);
   if (relative !== null) return leveragesOf(relative);
   return saturating === null ? null : saturatingLeverages(problem, saturating);
 }
