@@ -157,6 +157,11 @@ export type WarningCode =
   | 'two-temperatures'
   | 'order-changes-with-temperature'
   | 'arrhenius-curved'
+  | 'arrhenius-bends-down'
+  | 'arrhenius-bends-up'
+  | 'pore-diffusion'
+  | 'hot-wells-deactivate'
+  | 'one-step-disagrees'
   | 'low-activation-energy'
   | 'negative-activation-energy'
   | 'blank-reacts'
@@ -274,6 +279,27 @@ export interface Adsorption {
   enthalpy: Estimate | null;
 }
 
+/** All readings of a catalyst fitted at once, ln k on a straight line against 1/T. */
+export interface OneStep {
+  /** J/mol; the interval allows for the scatter of wells and blocks. */
+  activationEnergy: Estimate;
+  /** J/mol: standard error from the noise of the readings alone. */
+  readingSe: number | null;
+  /** ln of k (of kRel where k is not known) at `centreK`, at the pooled loading. */
+  lnKc: number;
+  lnKcSe: number | null;
+  /** K. */
+  centreK: number;
+  /** J/mol; only of the saturating law. */
+  adsorptionEnthalpy: Estimate | null;
+  /** ln of K at `centreK`; only of the saturating law. */
+  lnAdsorptionConstant: number | null;
+  wells: number;
+  readings: number;
+  /** This energy or that of the single wells lies outside the other's interval. */
+  disagreesWithTwoStep: boolean;
+}
+
 /** Apparent activation parameters of a first-order constant per site. */
 export interface ActivationParameters {
   /** ΔH‡, J/mol. */
@@ -330,6 +356,8 @@ export interface CatalystAnalysis {
   /** Evidence over all its wells: Akaike weights of the laws fitted jointly. */
   weights: Partial<Record<RateLawName, number>>;
   warnings: WarningCode[];
+  /** Null without a law, below 2 temperatures, and where a blank was taken off. */
+  oneStep: OneStep | null;
 }
 
 /** One run of the engine. */

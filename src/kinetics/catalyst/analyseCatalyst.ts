@@ -13,6 +13,7 @@ import type {
 import { activationParameters } from './eyring';
 import type { BlankModel } from '../blanks/blankModel';
 import { blanksReact, type BlankRate } from './blanksReact';
+import { fitOneStep } from './fitOneStep';
 import { describeByInitialRate } from './initialRateBasis';
 import { anyDecay } from './jointDecay';
 import { describeByLaw } from './lawBasis';
@@ -87,7 +88,11 @@ export function analyseCatalyst(
       warnings.push('not-above-blank');
     }
   }
-  const { net: _, ...figures } = basis;
+  const { net, ...figures } = basis;
+  const oneStep = net
+    ? null
+    : fitOneStep(pooled, { ...decided, ...basis, kKnown: basis.kUnit !== null });
+  if (oneStep?.disagreesWithTwoStep) warnings.push('one-step-disagrees');
   const rateRefPerMass = perMass(
     basis.rateRef,
     dimension === 'concentration' ? loading.loadingGPerL : null,
@@ -113,6 +118,7 @@ export function analyseCatalyst(
     seriesIds: wells.map((well) => well.series.id),
     weights: decided.weights,
     warnings: [...new Set(warnings)],
+    oneStep,
   };
 }
 
