@@ -1,5 +1,5 @@
 import type { CandidateView } from '../../contracts/candidate';
-import { rateUnit } from '../../kinetics/rateLaws/rateConstantUnit';
+import { rateUnit, reciprocalUnit } from '../../kinetics/rateLaws/rateConstantUnit';
 import { celsius } from '../charts/buildArrheniusOption';
 import { readingUnitFor } from '../charts/displayUnits';
 import { plotNumber } from '../charts/plotNumber';
@@ -80,6 +80,7 @@ export function headerFigures({ result, campaign, catalyst }: CandidateView): He
           ? 'no order, so no k; the rates stand without one'
           : 'no order, so no k',
     },
+    ...adsorptionFigures(result),
     ...rates.slice(0, 1),
     {
       name: `Time to ${Math.round(campaign.targetConversion * 1000) / 10} % conversion`,
@@ -88,6 +89,26 @@ export function headerFigures({ result, campaign, catalyst }: CandidateView): He
       note: result.timeToTarget ? bracket : none,
     },
     ...(dimension === 'concentration' ? rates.slice(1) : []),
+  ];
+}
+
+/** How strongly a saturating catalyst holds the reactant. */
+function adsorptionFigures({ adsorption, dimension }: CandidateView['result']): HeaderFigure[] {
+  if (adsorption === null) return [];
+  const { K, temperatureK, enthalpy } = adsorption;
+  return [
+    {
+      name: 'Adsorption constant K',
+      at: celsius(temperatureK),
+      figure: figureOf(K, reciprocalUnit(dimension)),
+      note: null,
+    },
+    {
+      name: 'Adsorption enthalpy',
+      at: 'apparent',
+      figure: enthalpy && figureOf(enthalpy, 'kJ/mol', 1e-3),
+      note: enthalpy ? null : 'needs K at more than one temperature',
+    },
   ];
 }
 
