@@ -1,0 +1,209 @@
+import { EVIDENCE_TO_ASSERT } from '../verdict/selectRateLaw';
+import { evidenceRatio } from '../statistics/goodnessOfFit';
+import type { RateLawName, SeriesAnalysis } from '../types';
+import { expectedSelection } from './expectedSelection';
+import {
+  competingLaws,
+  expectedConversion,
+  expectedCurve,
+  type ExpectedCurve,
+  type PlannedWell,
+} from './plannedWell';
+import { evenTimes, mostReadings } from './samplingTimes';
+
+/** What would settle the order of a well. */
+export interface DiscriminatingTimes {
+  /**
+   * `repeat`: a second run as it was; `time`: another last reading; `readings`: more of them;
+   * `noise`: no duration and no number of readings helps at this noise; `bend`: product has grown
+   * too straight to show where it ends, so a longer run comes before any plan.
+   */
+  by: 'repeat' | 'time' | 'readings' | 'noise' | 'bend';
+  /** The laws that compete, the likeliest first. */
+  laws: RateLawName[];
+  /** s, ascending; the proposed sampling. */
+  timesS: number[];
+  lastS: number;
+  readings: number;
+  /** Conversion reached at `lastS`, the lowest of the competing laws; null when `by` is `bend`. */
+  conversion: number | null;
+  /** Readings that would do within the present duration; null where none would. */
+  readingsAtPresentDuration: number | null;
+  /** Share of the present noise at which the proposed times do; null unless `by` is `noise`. */
+  noiseShare: number | null;
+  /** Runs whose evidence adds up to the same; null unless `by` is `noise`. */
+  replicates: number | null;
+  /** Expected at the proposed sampling, the lowest of the competing laws; null when `by` is `bend`. */
+  evidenceRatio: number | null;
+}
+
+export interface SamplingLimits {
+  /** s between two readings of one well, at least 0. */
+  shortestIntervalS: number;
+  /** s, the longest run; null for no limit. */
+  longestRunS: number | null;
+}
+
+/** Durations tried, as multiples of the present one. */
+const LONGER = Array.from({ length: 22 }, (_, i) => 1.2 ** (i + 1));
+const SHORTER = Array.from({ length: 16 }, (_, i) => 1.25 ** -(i + 1));
+const MORE_READINGS = [1.5, 2, 3, 4, 6, 8];
+const LESS_NOISE = [0.7, 0.5, 0.35, 0.25, 0.15, 0.1];
+
+/** How much longer product is followed that shows no end yet, and what counts as that. */
+const LONGER_TO_BEND = 3;
+const LOOSE_C0 = 0.3;
+
+/** Beyond this conversion under every law nothing is left to tell them by. */
+const HIGHEST_CONVERSION = 0.995;
+
+/** The laws that a well does not yet tell apart, the likeliest first. */
+export function lawsInPlay({ fits }: Pick<SeriesAnalysis, 'fits'>): RateLawName[] {
+  const known = competingLaws().flatMap(({ name }) => {
+    const aicc = fits[name]?.aicc;
+    return aicc == null ? [] : [{ name, aicc }];
+  });
+  known.sort((a, b) => a.aicc - b.aicc);
+  return known
+    .filter(({ aicc }, i) => i < 2 || evidenceRatio(known[0]!.aicc, aicc) < EVIDENCE_TO_ASSERT)
+    .map(({ name }) => name);
+}
+
+/**
+ * The sampling times that are expected to settle a well's order, whichever of the competing laws is
+ * true: the shortest change of duration at the number of readings as it was; else more readings;
+ * else less noise or replicates.
+ *
+ * The aim is the one of Box & Hill (1967), designs under which the rivals predict most differently;
+ * the criterion is the non-centrality of the best-fitting rival (T-optimality, Atkinson & Fedorov
+ * 1975), read through the engine's own rule for asserting an order.
+ *
+ * @returns null where no law gives a curve to predict by
+ */
+export function discriminatingTimes(
+  well: PlannedWell,
+  limits: SamplingLimits,
+): DiscriminatingTimes | null {
+  const laws = lawsInPlay(well.analysis);
+  const [first] = laws;
+  const sigma = first === undefined ? null : (well.analysis.fits[first]?.residualSd ?? null);
+  const curves = laws
+    .map((name) => expectedCurve(well.analysis, name, sigma))
+    .filter((curve) => curve !== null);
+  const present = well.timesS.length;
+  const firstS = well.timesS[0] ?? 0;
+  const spanS = (well.timesS[present - 1] ?? 0) - firstS;
+  if (present < 3 || !(spanS > 0)) return null;
+  if (well.analysis.kind === 'product' && laws.some((name) => endIsOpen(well.analysis, name))) {
+    const lastS =
+      firstS + Math.min(LONGER_TO_BEND * spanS, (limits.longestRunS ?? Infinity) - firstS);
+    if (!(lastS > firstS + spanS)) return null;
+    return {
+      ...openEnd(laws),
+      timesS: evenTimes(firstS, lastS, present, limits.shortestIntervalS),
+      lastS,
+      readings: present,
+    };
+  }
+  if (curves.length === 0) return null;
+
+  const judge = (lastS: number, readings: number, noise = 1) => {
+    const timesS = evenTimes(firstS, lastS, readings, limits.shortestIntervalS);
+    const expected = curves.map((curve) =>
+      expectedSelection({ ...curve, residualSd: curve.residualSd * noise }, timesS),
+    );
+    return {
+      timesS,
+      settles: expected.every((one) => one.settles),
+      ratio: Math.min(...expected.map((one) => one.evidenceRatio)),
+    };
+  };
+  const presentLastS = firstS + spanS;
+  const durations = possibleDurations(curves, firstS, spanS, limits);
+  const more = MORE_READINGS.map((factor) => Math.ceil(factor * present));
+  const fits = (lastS: number, n: number) =>
+    n <= mostReadings(firstS, lastS, limits.shortestIntervalS);
+  const readingsAtPresentDuration =
+    more.find((n) => fits(presentLastS, n) && judge(presentLastS, n).settles) ?? null;
+
+  const answer = (
+    by: DiscriminatingTimes['by'],
+    lastS: number,
+    readings: number,
+    noiseShare: number | null = null,
+  ): DiscriminatingTimes => {
+    const { timesS, ratio } = judge(lastS, readings, noiseShare ?? 1);
+    return {
+      by,
+      laws,
+      timesS,
+      lastS,
+      readings: timesS.length,
+      conversion: Math.min(...curves.map((curve) => expectedConversion(curve, lastS))),
+      readingsAtPresentDuration,
+      noiseShare,
+      replicates: noiseShare === null ? null : Math.ceil(noiseShare ** -2 - 1e-9),
+      evidenceRatio: ratio,
+    };
+  };
+  if (judge(presentLastS, present).settles) return answer('repeat', presentLastS, present);
+  for (const lastS of durations) {
+    if (judge(lastS, present).settles) return answer('time', lastS, present);
+  }
+  for (const readings of more) {
+    for (const lastS of durations) {
+      if (fits(lastS, readings) && judge(lastS, readings).settles) {
+        return answer('readings', lastS, readings);
+      }
+    }
+  }
+  const told = [presentLastS, ...durations].map((lastS) => ({
+    lastS,
+    ratio: judge(lastS, present).ratio,
+  }));
+  told.sort((a, b) => b.ratio - a.ratio || a.lastS - b.lastS);
+  for (const share of LESS_NOISE) {
+    const found = told.find(({ lastS }) => judge(lastS, present, share).settles);
+    if (found !== undefined) return answer('noise', found.lastS, present, share);
+  }
+  return answer('noise', told[0]!.lastS, present, LESS_NOISE[LESS_NOISE.length - 1]!);
+}
+
+/** True when a fit of product does not tell how much there will be in the end. */
+function endIsOpen({ fits }: SeriesAnalysis, name: RateLawName): boolean {
+  const fit = fits[name];
+  if (fit == null || fit.c0 === null || fit.c0Se === null) return true;
+  return fit.c0Se > LOOSE_C0 * fit.c0;
+}
+
+const openEnd = (laws: RateLawName[]) =>
+  ({
+    by: 'bend',
+    laws,
+    conversion: null,
+    readingsAtPresentDuration: null,
+    noiseShare: null,
+    replicates: null,
+    evidenceRatio: null,
+  }) as const;
+
+/** Last times worth trying, the smallest change first; longer before shorter. */
+function possibleDurations(
+  curves: readonly ExpectedCurve[],
+  firstS: number,
+  spanS: number,
+  { longestRunS, shortestIntervalS }: SamplingLimits,
+): number[] {
+  const useful = Math.max(
+    ...curves.map(
+      ({ law, kRel, originS }) =>
+        originS + (law.order === 0 ? 2 : law.reach(HIGHEST_CONVERSION)) / kRel,
+    ),
+  );
+  const longest = Math.min(useful, longestRunS ?? Infinity);
+  const longer = LONGER.map((factor) => firstS + factor * spanS).filter((s) => s <= longest);
+  const shorter = SHORTER.map((factor) => firstS + factor * spanS).filter(
+    (s) => s - firstS >= 4 * shortestIntervalS,
+  );
+  return [...longer, ...shorter];
+}

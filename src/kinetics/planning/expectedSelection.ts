@@ -1,0 +1,82 @@
+import { fitDepartures } from '../fitting/fitDepartures';
+import { fitLaw } from '../fitting/fitLaw';
+import { aicc, evidenceRatio } from '../statistics/goodnessOfFit';
+import { intervalFactor } from '../statistics/tDistribution';
+import { selectRateLaw, type Evidence } from '../verdict/selectRateLaw';
+import { expectedOrderSe } from './expectedOrderSe';
+import { competingLaws, expectedProblem, type ExpectedCurve } from './plannedWell';
+
+/** What the engine is expected to say of a well that is yet to be run. */
+export interface ExpectedSelection {
+  /** True when the true law is expected to be asserted. */
+  settles: boolean;
+  /** Expected evidence ratio of the true law over its best-fitting rival of whole order. */
+  evidenceRatio: number;
+  /** Expected standard error of the free order; null where the times do not determine it. */
+  orderSe: number | null;
+}
+
+/**
+ * Normal quantile by which every condition is held on the safe side. At 0 about half of the runs
+ * would settle; with this one about four in five or more do, by the simulation in
+ * tests/unit/kinetics/planning/discriminatingTimes.test.ts.
+ */
+const SAFETY = 1.28;
+
+/**
+ * The verdict expected from readings at given times when one law is true.
+ *
+ * Every rival is fitted to the predicted readings without noise; what it must leave,
+ * Δ = Σ(η_true − η_rival)², over σ² is the non-centrality λ that a T-optimal design makes large
+ * (Atkinson & Fedorov 1975). With noise the residual sums of the two differ by about
+ * σ²(λ ± 2√λ); the lower end stands, and the engine's own rule decides on the AICc that follow.
+ *
+ * @param curve taken as true
+ * @param timesS s, ascending
+ */
+export function expectedSelection(
+  curve: ExpectedCurve,
+  timesS: readonly number[],
+): ExpectedSelection {
+  const laws = competingLaws();
+  const problem = expectedProblem(curve, timesS);
+  const n = timesS.length;
+  const variance = curve.residualSd ** 2;
+  const fits = laws.map((law) => fitLaw(problem, law));
+  const own = fits.find((fit) => fit.law === curve.law);
+  const first = fits.find((fit) => fit.law.order === 1);
+  const nothing = { settles: false, evidenceRatio: 1, orderSe: null };
+  if (own === undefined || first === undefined) return nothing;
+
+  const criterion = (rss: number, parameters: number) => {
+    const lambda = rss / variance;
+    const left = Math.max(lambda - 2 * SAFETY * Math.sqrt(lambda), 0);
+    return aicc(n, n - parameters + left, parameters);
+  };
+  const evidence: Evidence = { laws: [], rivals: {}, rivalCharge: 0 };
+  for (const fit of fits) {
+    const value =
+      fit === own
+        ? aicc(n, n - fit.parameters, fit.parameters)
+        : criterion(fit.rss, fit.parameters);
+    if (value === null) return nothing;
+    evidence.laws.push({ name: fit.law.name, order: fit.law.order, aicc: value });
+  }
+  for (const { name, rss, parameters } of fitDepartures(first)) {
+    const value = criterion(rss, parameters);
+    if (value !== null) evidence.rivals[name] = value;
+  }
+  const orderSe = expectedOrderSe(curve, timesS);
+  const dof = n - own.parameters - 1;
+  const free =
+    orderSe === null || dof < 1
+      ? null
+      : { order: curve.law.order, orderSe: orderSe * (1 + SAFETY / intervalFactor(dof)), dof };
+  const selection = selectRateLaw(evidence, free);
+  const [best, rival] = evidence.laws.map((law) => law.aicc).sort((a, b) => a - b);
+  return {
+    settles: selection.order === curve.law.order,
+    evidenceRatio: Math.min(evidenceRatio(best!, rival!), Number.MAX_VALUE),
+    orderSe,
+  };
+}
