@@ -32,7 +32,7 @@ export function dOptimalPair(
     spans = best.times.map((time) => [
       Math.max(time - step, range[0]),
       Math.min(time + step, range[1]),
-    ]) as [[number, number], [number, number]];
+    ]);
     step *= 2 / GRID;
   }
   const [a, b] = best.times as [number, number];

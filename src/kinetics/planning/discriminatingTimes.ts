@@ -15,26 +15,27 @@ import { evenTimes, mostReadings } from './samplingTimes';
 export interface DiscriminatingTimes {
   /**
    * `repeat`: a second run as it was; `time`: another last reading; `readings`: more of them;
-   * `noise`: no duration and no number of readings helps at this noise; `bend`: product has grown
-   * too straight to show where it ends, so a longer run comes before any plan.
+   * `noise`: no duration and no number of readings helps at this noise, less noise does; `none`:
+   * nor does that; `bend`: product has grown too straight to show where it ends, so a longer run
+   * comes before any plan; `over`: the reaction ends before the second reading.
    */
-  by: 'repeat' | 'time' | 'readings' | 'noise' | 'bend';
+  by: 'repeat' | 'time' | 'readings' | 'noise' | 'none' | 'bend' | 'over';
   /** The laws that compete, the likeliest first. */
   laws: RateLawName[];
   /** s, ascending; the proposed sampling. */
   timesS: number[];
   lastS: number;
   readings: number;
-  /** Conversion reached at `lastS`, the lowest of the competing laws; null when `by` is `bend`. */
-  conversion: number | null;
+  /** Conversion reached at `lastS`, the lowest of the competing laws; 0 when `by` is `bend`. */
+  conversion: number;
   /** Readings that would do within the present duration; null where none would. */
   readingsAtPresentDuration: number | null;
   /** Share of the present noise at which the proposed times do; null unless `by` is `noise`. */
   noiseShare: number | null;
   /** Runs whose evidence adds up to the same; null unless `by` is `noise`. */
   replicates: number | null;
-  /** Expected at the proposed sampling, the lowest of the competing laws; null when `by` is `bend`. */
-  evidenceRatio: number | null;
+  /** Expected at the proposed sampling, the lowest of the competing laws; 1 where none is planned. */
+  evidenceRatio: number;
 }
 
 export interface SamplingLimits {
@@ -48,12 +49,14 @@ export interface SamplingLimits {
 const LONGER = Array.from({ length: 22 }, (_, i) => 1.2 ** (i + 1));
 const SHORTER = Array.from({ length: 16 }, (_, i) => 1.25 ** -(i + 1));
 const MORE_READINGS = [1.5, 2, 3, 4, 6, 8];
-const LESS_NOISE = [0.7, 0.5, 0.35, 0.25, 0.15, 0.1];
+const LESS_NOISE = [0.7, 0.5, 0.35, 0.25];
 
 /** How much longer product is followed that shows no end yet, and what counts as that. */
 const LONGER_TO_BEND = 3;
 const LOOSE_C0 = 0.3;
 
+/** Beyond this conversion at its second reading a reaction is over. */
+const OVER = 0.95;
 /** Beyond this conversion under every law nothing is left to tell them by. */
 const HIGHEST_CONVERSION = 0.995;
 
@@ -85,27 +88,31 @@ export function discriminatingTimes(
   limits: SamplingLimits,
 ): DiscriminatingTimes | null {
   const laws = lawsInPlay(well.analysis);
-  const [first] = laws;
-  const sigma = first === undefined ? null : (well.analysis.fits[first]?.residualSd ?? null);
-  const curves = laws
-    .map((name) => expectedCurve(well.analysis, name, sigma))
-    .filter((curve) => curve !== null);
+  const [best] = laws;
   const present = well.timesS.length;
   const firstS = well.timesS[0] ?? 0;
   const spanS = (well.timesS[present - 1] ?? 0) - firstS;
-  if (present < 3 || !(spanS > 0)) return null;
-  if (well.analysis.kind === 'product' && laws.some((name) => endIsOpen(well.analysis, name))) {
-    const lastS =
-      firstS + Math.min(LONGER_TO_BEND * spanS, (limits.longestRunS ?? Infinity) - firstS);
-    if (!(lastS > firstS + spanS)) return null;
-    return {
-      ...openEnd(laws),
-      timesS: evenTimes(firstS, lastS, present, limits.shortestIntervalS),
-      lastS,
-      readings: present,
-    };
+  if (best === undefined || present < 3 || !(spanS > 0)) return null;
+  const presentLastS = firstS + spanS;
+  const nothing = { laws, ...NOTHING_PLANNED };
+  if (endIsOpen(well.analysis, best)) {
+    const longest = Math.max(limits.longestRunS ?? Infinity, presentLastS);
+    const lastS = Math.min(firstS + LONGER_TO_BEND * spanS, longest);
+    const timesS = evenTimes(firstS, lastS, present, limits.shortestIntervalS);
+    return { ...nothing, by: 'bend', timesS, lastS, readings: timesS.length };
   }
-  if (curves.length === 0) return null;
+  const sigma = well.analysis.fits[best]?.residualSd ?? null;
+  const curves = laws
+    .filter((name) => !endIsOpen(well.analysis, name))
+    .map((name) => expectedCurve(well.analysis, name, sigma))
+    .filter((curve) => curve !== null);
+  const [likeliest] = curves;
+  if (likeliest === undefined) return null;
+  const secondS = well.timesS.find((timeS) => timeS > firstS)!;
+  if (expectedConversion(likeliest, secondS) > OVER) {
+    const timesS = [...well.timesS];
+    return { ...nothing, by: 'over', timesS, lastS: secondS, readings: present, conversion: 1 };
+  }
 
   const judge = (lastS: number, readings: number, noise = 1) => {
     const timesS = evenTimes(firstS, lastS, readings, limits.shortestIntervalS);
@@ -118,7 +125,6 @@ export function discriminatingTimes(
       ratio: Math.min(...expected.map((one) => one.evidenceRatio)),
     };
   };
-  const presentLastS = firstS + spanS;
   const durations = possibleDurations(curves, firstS, spanS, limits);
   const more = MORE_READINGS.map((factor) => Math.ceil(factor * present));
   const fits = (lastS: number, n: number) =>
@@ -166,26 +172,24 @@ export function discriminatingTimes(
     const found = told.find(({ lastS }) => judge(lastS, present, share).settles);
     if (found !== undefined) return answer('noise', found.lastS, present, share);
   }
-  return answer('noise', told[0]!.lastS, present, LESS_NOISE[LESS_NOISE.length - 1]!);
+  return answer('noise', told[0]!.lastS, present, LESS_NOISE[LESS_NOISE.length - 1]);
 }
 
 /** True when a fit of product does not tell how much there will be in the end. */
-function endIsOpen({ fits }: SeriesAnalysis, name: RateLawName): boolean {
+function endIsOpen({ kind, fits }: SeriesAnalysis, name: RateLawName): boolean {
+  if (kind !== 'product') return false;
   const fit = fits[name];
   if (fit == null || fit.c0 === null || fit.c0Se === null) return true;
   return fit.c0Se > LOOSE_C0 * fit.c0;
 }
 
-const openEnd = (laws: RateLawName[]) =>
-  ({
-    by: 'bend',
-    laws,
-    conversion: null,
-    readingsAtPresentDuration: null,
-    noiseShare: null,
-    replicates: null,
-    evidenceRatio: null,
-  }) as const;
+const NOTHING_PLANNED = {
+  conversion: 0,
+  readingsAtPresentDuration: null,
+  noiseShare: null,
+  replicates: null,
+  evidenceRatio: 1,
+};
 
 /** Last times worth trying, the smallest change first; longer before shorter. */
 function possibleDurations(

@@ -23,6 +23,8 @@ export interface RateConstantPlan {
   readingsForTarget: number;
 }
 
+/** u at which a zero order is read last; its best time, u = 1, is where it runs out. */
+const SHORT_OF_EXHAUSTION = 0.95;
 /** Beyond these the spacing of readings, not their number, decides. */
 const MOST_READINGS = 400;
 
@@ -53,7 +55,7 @@ export function planForRateConstant(
   const latest = latestUseful(curve, lastS);
   if (!(latest > firstS)) return null;
   const pointsS = fixed
-    ? dOptimalSingle(gradient, firstS, latest)
+    ? [Math.min(Math.max(curve.originS + 1 / curve.kRel, firstS), latest)]
     : dOptimalPair(gradient, [firstS, latest]);
   if (pointsS === null) return null;
   const judge = (count: number) => {
@@ -92,22 +94,11 @@ function gradientOf({ law, kind, amplitude, kRel, originS }: ExpectedCurve): Res
   };
 }
 
-/** A zero order that has run out tells nothing more of its decay: stop there, on the safe side. */
+/** A zero order that has run out tells nothing more of its decay, so readings stop short of that. */
 function latestUseful({ law, kind, kRel, originS }: ExpectedCurve, lastS: number): number {
-  return law.order === 0 && MODE[kind] === 'decay' ? Math.min(lastS, originS + 1 / kRel) : lastS;
-}
-
-function dOptimalSingle(
-  gradient: ResponseGradient,
-  firstS: number,
-  lastS: number,
-): number[] | null {
-  // Beside a parameter that only the start could tell, the pair's other time is the single one.
-  const pair = dOptimalPair(
-    (time) => [time === firstS ? 1 : 0, gradient(time)[1]],
-    [firstS, lastS],
-  );
-  return pair === null ? null : [pair[1]];
+  return law.order === 0 && MODE[kind] === 'decay'
+    ? Math.min(lastS, originS + SHORT_OF_EXHAUSTION / kRel)
+    : lastS;
 }
 
 function relativeHalfWidth(
