@@ -15,7 +15,7 @@ export { explainCatalyst, explainSeries, explainWarning } from './explanations';
 export { explainProposal } from './planning/explainProposal';
 export type { PlannedWell } from './planning/plannedWell';
 export type { PlanningOptions, Proposal } from './planning/proposal';
-export { proposals, RANGE_BEYOND_MEASURED_K } from './planning/proposals';
+export { proposals } from './planning/proposals';
 export { baseUnit, rateConstantUnit, rateUnit } from './rateLaws/rateConstantUnit';
 export { findRateLaw, lawOfOrder, rateLaws } from './rateLaws/registry';
 export { formatWithUncertainty, superscript, type FormattedValue } from './significantFigures';

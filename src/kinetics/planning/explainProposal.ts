@@ -69,7 +69,7 @@ function tellLaws(proposal: TellLaws): string {
     case 'more-readings':
       return `Sample ${at} to ${durationUp(lastS)} (${reach})${instead} to ${tell(laws)}.${more}`;
     case 'sample-within':
-      return `Sample ${at} within the first ${durationNear(lastS)} (${reach})${instead} to ${tell(laws)}: most of the present readings come after the reaction.`;
+      return `Sample ${at} within the first ${durationNear(lastS)} (${reach})${instead} to ${tell(laws)}: later readings come after the reaction.`;
     case 'repeat-well':
       return `Repeat ${at} as it was (${readings} readings to ${durationUp(lastS)}): one more run like it is expected to ${tell(laws)}.`;
     case 'lower-noise':

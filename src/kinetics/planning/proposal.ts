@@ -2,6 +2,9 @@ import type { RateLawName, ReadingDimension } from '../types';
 import type { TemperatureRange } from './discriminatingTemperature';
 import type { SamplingLimits } from './discriminatingTimes';
 
+/** K beyond the measured temperatures that may be run where no range is given. */
+export const RANGE_BEYOND_MEASURED_K = 10;
+
 /** What may be run next; `explainProposal` holds the sentence for each. Serialisable. */
 export type Proposal =
   | TellLaws
@@ -125,7 +128,7 @@ export interface TellLaws {
 
 /** What the instrument and the group allow. */
 export interface PlanningOptions extends Partial<SamplingLimits> {
-  /** K, ascending; without it, 10 K beyond what the catalyst was measured at. */
+  /** K, ascending; without it, `RANGE_BEYOND_MEASURED_K` beyond what its wells were measured at. */
   temperatureRangeK?: TemperatureRange;
   /** Half width of the 95 % interval of k over k. */
   rateTarget?: number;

@@ -6,12 +6,10 @@ import { detectReaction } from './detectReaction';
 import { planForActivationEnergy, TARGET_EA_HALF_WIDTH } from './planForActivationEnergy';
 import { TARGET_RATE_HALF_WIDTH } from './planForRateConstant';
 import type { PlannedWell } from './plannedWell';
-import type { PlanningOptions, Proposal } from './proposal';
+import { RANGE_BEYOND_MEASURED_K, type PlanningOptions, type Proposal } from './proposal';
 import { tellLawsApart } from './tellLawsApart';
 import { tightenRateConstant } from './tightenRateConstant';
 
-/** K beyond the measured temperatures that may be run where no range is given. */
-export const RANGE_BEYOND_MEASURED_K = 10;
 /** Wells read at leisure can be read about twice as often. */
 const UNHURRIED = 0.5;
 /** Readings of a well that usually decide an order. */
