@@ -95,7 +95,7 @@ function tightenEnergy(proposal: ProposalOf<'tighten-activation-energy'>): strin
         ? `${wells} each on ${plates} plates`
         : `${wells} each`;
   const verb = repeats ? 'Run' : 'Add';
-  const again = repeats ? ' once more on another plate' : '';
+  const again = repeats ? ' once more' : '';
   const outcome = `the activation energy is then expected within ± ${kilojoules(proposal.expectedHalfWidth)} kJ/mol; it is within ± ${kilojoules(proposal.halfWidth)} kJ/mol now`;
   const left = reachesTarget ? '' : ` ± ${kilojoules(proposal.target)} kJ/mol needs less scatter.`;
   return `${verb} ${temperatures}${again} (${each}): ${outcome}.${left}`;

@@ -36,7 +36,7 @@ const byEffort = (a: WellPlan, b: WellPlan) =>
 
 /**
  * The run that settles an open order with the least effort: one well per temperature is planned
- * for, the one in the middle of its replicates, and the temperature that needs the least is
+ * for, the one whose noise is in the middle of its replicates, and the temperature that needs the least is
  * proposed. All wells of a catalyst share their law, so one temperature can decide for all.
  *
  * @param wells reacting, with 5 readings or more
@@ -60,14 +60,17 @@ export function tellLawsApart(
   return easiest === undefined ? [] : [propose(catalyst, easiest, range)];
 }
 
+/** The plan of the well whose noise is in the middle of its replicates, else of one that has one. */
 function middlePlan(wells: readonly PlannedWell[], limits: SamplingLimits): WellPlan | null {
-  const plans = wells.flatMap((well): WellPlan[] => {
-    if (well.analysis.warnings.includes('exact-fit')) return [];
+  const usable = wells
+    .filter(({ analysis }) => !analysis.warnings.includes('exact-fit'))
+    .sort((a, b) => (a.analysis.residualSd ?? Infinity) - (b.analysis.residualSd ?? Infinity));
+  const middle = usable.splice(Math.floor(usable.length / 2), 1);
+  for (const well of [...middle, ...usable]) {
     const plan = discriminatingTimes(well, limits);
-    return plan === null ? [] : [{ well, plan }];
-  });
-  plans.sort(byEffort);
-  return plans[Math.floor(plans.length / 2)] ?? null;
+    if (plan !== null) return { well, plan };
+  }
+  return null;
 }
 
 function propose(
