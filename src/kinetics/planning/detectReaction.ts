@@ -2,7 +2,7 @@ import { SAME_TEMPERATURE_K } from '../catalyst/temperatures';
 import { studentTQuantile } from '../statistics/tDistribution';
 import { DECAY_LEVEL } from '../verdict/decayTest';
 import type { TemperatureRange } from './discriminatingTemperature';
-import type { SamplingLimits } from './discriminatingTimes';
+import type { SamplingLimits } from './samplingTimes';
 import type { PlannedWell } from './plannedWell';
 import type { Proposal } from './proposal';
 

@@ -2,14 +2,9 @@ import { EVIDENCE_TO_ASSERT } from '../verdict/selectRateLaw';
 import { evidenceRatio } from '../statistics/goodnessOfFit';
 import type { RateLawName, SeriesAnalysis } from '../types';
 import { expectedSelection } from './expectedSelection';
-import {
-  competingLaws,
-  expectedConversion,
-  expectedCurve,
-  type ExpectedCurve,
-  type PlannedWell,
-} from './plannedWell';
-import { evenTimes, mostReadings } from './samplingTimes';
+import { competingLaws, expectedConversion, expectedCurve, type PlannedWell } from './plannedWell';
+import { evenTimes, type SamplingLimits } from './samplingTimes';
+import { searchDesign } from './searchDesign';
 
 /** What would settle the order of a well. */
 export interface DiscriminatingTimes {
@@ -38,27 +33,12 @@ export interface DiscriminatingTimes {
   evidenceRatio: number;
 }
 
-export interface SamplingLimits {
-  /** s between two readings of one well, at least 0. */
-  shortestIntervalS: number;
-  /** s, the longest run; null for no limit. */
-  longestRunS: number | null;
-}
-
-/** Durations tried, as multiples of the present one. */
-const LONGER = Array.from({ length: 22 }, (_, i) => 1.2 ** (i + 1));
-const SHORTER = Array.from({ length: 16 }, (_, i) => 1.25 ** -(i + 1));
-const MORE_READINGS = [1.5, 2, 3, 4, 6, 8];
-const LESS_NOISE = [0.7, 0.5, 0.35, 0.25];
-
 /** How much longer product is followed that shows no end yet, and what counts as that. */
 const LONGER_TO_BEND = 3;
 const LOOSE_C0 = 0.3;
 
 /** Beyond this conversion at its second reading a reaction is over. */
 const OVER = 0.95;
-/** Beyond this conversion under every law nothing is left to tell them by. */
-const HIGHEST_CONVERSION = 0.995;
 
 /** The laws that a well does not yet tell apart, the likeliest first. */
 export function lawsInPlay({ fits }: Pick<SeriesAnalysis, 'fits'>): RateLawName[] {
@@ -114,65 +94,26 @@ export function discriminatingTimes(
     return { ...nothing, by: 'over', timesS, lastS: secondS, readings: present, conversion: 1 };
   }
 
-  const judge = (lastS: number, readings: number, noise = 1) => {
-    const timesS = evenTimes(firstS, lastS, readings, limits.shortestIntervalS);
-    const expected = curves.map((curve) =>
-      expectedSelection({ ...curve, residualSd: curve.residualSd * noise }, timesS),
-    );
-    return {
-      timesS,
-      settles: expected.every((one) => one.settles),
-      ratio: Math.min(...expected.map((one) => one.evidenceRatio)),
-    };
-  };
-  const durations = possibleDurations(curves, firstS, spanS, limits);
-  const more = MORE_READINGS.map((factor) => Math.ceil(factor * present));
-  const fits = (lastS: number, n: number) =>
-    n <= mostReadings(firstS, lastS, limits.shortestIntervalS);
-  const readingsAtPresentDuration =
-    more.find((n) => fits(presentLastS, n) && judge(presentLastS, n).settles) ?? null;
-
-  const answer = (
-    by: DiscriminatingTimes['by'],
-    lastS: number,
-    readings: number,
-    noiseShare: number | null = null,
-  ): DiscriminatingTimes => {
-    const { timesS, ratio } = judge(lastS, readings, noiseShare ?? 1);
-    return {
-      by,
-      laws,
-      timesS,
-      lastS,
-      readings: timesS.length,
-      conversion: Math.min(...curves.map((curve) => expectedConversion(curve, lastS))),
-      readingsAtPresentDuration,
-      noiseShare,
-      replicates: noiseShare === null ? null : Math.ceil(noiseShare ** -2 - 1e-9),
-      evidenceRatio: ratio,
-    };
-  };
-  if (judge(presentLastS, present).settles) return answer('repeat', presentLastS, present);
-  for (const lastS of durations) {
-    if (judge(lastS, present).settles) return answer('time', lastS, present);
-  }
-  for (const readings of more) {
-    for (const lastS of durations) {
-      if (fits(lastS, readings) && judge(lastS, readings).settles) {
-        return answer('readings', lastS, readings);
-      }
-    }
-  }
-  const told = [presentLastS, ...durations].map((lastS) => ({
+  const found = searchDesign({ curves, readings: present, firstS, lastS: presentLastS }, limits);
+  const { by, lastS, readings, noiseShare } = found;
+  const timesS = evenTimes(firstS, lastS, readings, limits.shortestIntervalS);
+  const ratios = curves.map(
+    (curve) =>
+      expectedSelection({ ...curve, residualSd: curve.residualSd * (noiseShare ?? 1) }, timesS)
+        .evidenceRatio,
+  );
+  return {
+    by,
+    laws,
+    timesS,
     lastS,
-    ratio: judge(lastS, present).ratio,
-  }));
-  told.sort((a, b) => b.ratio - a.ratio || a.lastS - b.lastS);
-  for (const share of LESS_NOISE) {
-    const found = told.find(({ lastS }) => judge(lastS, present, share).settles);
-    if (found !== undefined) return answer('noise', found.lastS, present, share);
-  }
-  return answer('noise', told[0]!.lastS, present, LESS_NOISE[LESS_NOISE.length - 1]);
+    readings: timesS.length,
+    conversion: Math.min(...curves.map((curve) => expectedConversion(curve, lastS))),
+    readingsAtPresentDuration: found.readingsAtPresentDuration,
+    noiseShare,
+    replicates: noiseShare === null ? null : Math.ceil(noiseShare ** -2 - 1e-9),
+    evidenceRatio: Math.min(...ratios),
+  };
 }
 
 /** True when a fit of product does not tell how much there will be in the end. */
@@ -190,24 +131,3 @@ const NOTHING_PLANNED = {
   replicates: null,
   evidenceRatio: 1,
 };
-
-/** Last times worth trying, the smallest change first; longer before shorter. */
-function possibleDurations(
-  curves: readonly ExpectedCurve[],
-  firstS: number,
-  spanS: number,
-  { longestRunS, shortestIntervalS }: SamplingLimits,
-): number[] {
-  const useful = Math.max(
-    ...curves.map(
-      ({ law, kRel, originS }) =>
-        originS + (law.order === 0 ? 2 : law.reach(HIGHEST_CONVERSION)) / kRel,
-    ),
-  );
-  const longest = Math.min(useful, longestRunS ?? Infinity);
-  const longer = LONGER.map((factor) => firstS + factor * spanS).filter((s) => s <= longest);
-  const shorter = SHORTER.map((factor) => firstS + factor * spanS).filter(
-    (s) => s - firstS >= 4 * shortestIntervalS,
-  );
-  return [...longer, ...shorter];
-}

@@ -1,8 +1,14 @@
 import { fitDepartures } from '../fitting/fitDepartures';
 import { fitLaw } from '../fitting/fitLaw';
+import { MODE } from '../fitting/problem';
 import { aicc, evidenceRatio } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
-import { selectRateLaw, type Evidence } from '../verdict/selectRateLaw';
+import {
+  orderAgrees,
+  selectRateLaw,
+  type Evidence,
+  type FreeOrder,
+} from '../verdict/selectRateLaw';
 import { expectedOrderSe } from './expectedOrderSe';
 import { competingLaws, expectedProblem, type ExpectedCurve } from './plannedWell';
 
@@ -66,17 +72,32 @@ export function expectedSelection(
     const value = criterion(rss, parameters);
     if (value !== null) evidence.rivals[name] = value;
   }
-  const orderSe = expectedOrderSe(curve, timesS);
-  const dof = n - own.parameters - 1;
-  const free =
-    orderSe === null || dof < 1
-      ? null
-      : { order: curve.law.order, orderSe: orderSe * (1 + SAFETY / intervalFactor(dof)), dof };
+  const free = expectedOrder(curve, timesS);
   const selection = selectRateLaw(evidence, free);
   const [best, rival] = evidence.laws.map((law) => law.aicc).sort((a, b) => a - b);
   return {
     settles: selection.order === curve.law.order,
     evidenceRatio: Math.min(evidenceRatio(best!, rival!), Number.MAX_VALUE),
-    orderSe,
+    orderSe: expectedOrderSe(curve, timesS),
+  };
+}
+
+/** Whether the true law is expected to be asserted; quick where the free order already forbids it. */
+export function isExpectedToSettle(curve: ExpectedCurve, timesS: readonly number[]): boolean {
+  return (
+    orderAgrees(expectedOrder(curve, timesS), curve.law.order) &&
+    expectedSelection(curve, timesS).settles
+  );
+}
+
+/** The free order, its error on the safe side; null where it is not determined. */
+function expectedOrder(curve: ExpectedCurve, timesS: readonly number[]): FreeOrder | null {
+  const orderSe = expectedOrderSe(curve, timesS);
+  const dof = timesS.length - (MODE[curve.kind] === 'fraction' ? 2 : 3);
+  if (orderSe === null || dof < 1) return null;
+  return {
+    order: curve.law.order,
+    orderSe: orderSe * (1 + SAFETY / intervalFactor(dof)),
+    dof,
   };
 }

@@ -2,8 +2,7 @@ import { MODE } from '../fitting/problem';
 import { intervalFactor } from '../statistics/tDistribution';
 import { dOptimalPair, type ResponseGradient } from './dOptimalPair';
 import { expectedConversion, type ExpectedCurve } from './plannedWell';
-import { gatheredTimes } from './samplingTimes';
-import type { SamplingLimits } from './discriminatingTimes';
+import { gatheredTimes, type SamplingLimits } from './samplingTimes';
 
 /** Half width of the 95 % interval of kRel, as a share of it, at which k is tied down. */
 export const TARGET_RATE_HALF_WIDTH = 0.1;

@@ -1,6 +1,6 @@
 import type { RateLawName, ReadingDimension } from '../types';
 import type { TemperatureRange } from './discriminatingTemperature';
-import type { SamplingLimits } from './discriminatingTimes';
+import type { SamplingLimits } from './samplingTimes';
 
 /** K beyond the measured temperatures that may be run where no range is given. */
 export const RANGE_BEYOND_MEASURED_K = 10;

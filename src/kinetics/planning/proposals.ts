@@ -1,7 +1,7 @@
 import { countTemperatures, setTemperatures } from '../catalyst/temperatures';
 import type { CatalystAnalysis, Verdict } from '../types';
 import type { TemperatureRange } from './discriminatingTemperature';
-import type { SamplingLimits } from './discriminatingTimes';
+import type { SamplingLimits } from './samplingTimes';
 import { detectReaction } from './detectReaction';
 import { planForActivationEnergy, TARGET_EA_HALF_WIDTH } from './planForActivationEnergy';
 import { TARGET_RATE_HALF_WIDTH } from './planForRateConstant';

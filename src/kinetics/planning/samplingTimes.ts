@@ -1,3 +1,11 @@
+/** What the instrument and the day allow. */
+export interface SamplingLimits {
+  /** s between two readings of one well, at least 0. */
+  shortestIntervalS: number;
+  /** s, the longest run; null for no limit. */
+  longestRunS: number | null;
+}
+
 /** How far a gap may fall short of the shortest interval by rounding. */
 const ROUNDING = 1e-9;
 

@@ -1,11 +1,8 @@
 import { SAME_TEMPERATURE_K, setTemperatures } from '../catalyst/temperatures';
 import type { CatalystAnalysis } from '../types';
 import { discriminatingTemperature, type TemperatureRange } from './discriminatingTemperature';
-import {
-  discriminatingTimes,
-  type DiscriminatingTimes,
-  type SamplingLimits,
-} from './discriminatingTimes';
+import { discriminatingTimes, type DiscriminatingTimes } from './discriminatingTimes';
+import type { SamplingLimits } from './samplingTimes';
 import type { PlannedWell } from './plannedWell';
 import type { Proposal, TellLaws } from './proposal';
 

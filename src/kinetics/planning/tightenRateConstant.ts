@@ -2,7 +2,7 @@ import { setTemperatures } from '../catalyst/temperatures';
 import { lawOfOrder } from '../rateLaws/registry';
 import type { CatalystAnalysis } from '../types';
 import { intervalFactor } from '../statistics/tDistribution';
-import type { SamplingLimits } from './discriminatingTimes';
+import type { SamplingLimits } from './samplingTimes';
 import { planForRateConstant } from './planForRateConstant';
 import { expectedCurve, type PlannedWell } from './plannedWell';
 import type { Proposal } from './proposal';

@@ -1,11 +1,15 @@
 import { describe, expect, it } from 'vitest';
-import { analyseWell } from '../../../../src/kinetics';
-import type { PlannedWell } from '../../../../src/kinetics';
+import {
+  analyseScreen,
+  analyseWell,
+  type DecaySeries,
+  type PlannedWell,
+  type ReadingKind,
+} from '../../../../src/kinetics';
 import {
   discriminatingTimes,
   lawsInPlay,
 } from '../../../../src/kinetics/planning/discriminatingTimes';
-import type { ReadingKind } from '../../../../src/kinetics';
 import { decaySeries, seededNormal, times } from '../../../fixtures/decaySeries';
 
 const forms = {
@@ -18,15 +22,22 @@ type Law = keyof typeof forms;
 /** A source of wells of one law, 1/kRel = 1 h, C0 = 10 mmol/L. */
 function bench(law: Law, noise: number, seed: number, kind: ReadingKind = 'reactant') {
   const normal = seededNormal(seed);
-  return (timesS: number[]): PlannedWell => {
+  return (timesS: number[]): PlannedWell & { series: DecaySeries } => {
     const values = timesS.map((t) => {
       const g = forms[law](t / 3600);
       return 0.01 * ((kind === 'product' ? 1 - g : g) + noise * normal());
     });
-    return { analysis: analyseWell(decaySeries({ timesS, values, kind })).analysis, timesS };
+    const series = decaySeries({ timesS, values, kind });
+    return { series, analysis: analyseWell(series).analysis, timesS };
   };
 }
 
+const nowhere = {
+  temperatureK: null,
+  concentration: null,
+  loadingGPerL: null,
+  targetConversion: null,
+};
 const limits = { shortestIntervalS: 60, longestRunS: null };
 
 describe('times that tell an order', () => {
@@ -73,12 +84,24 @@ describe('times that tell an order', () => {
     expect(plan.lastS).toBeLessThanOrEqual(2000);
   });
 
-  it('give way to less noise or replicates where no time helps', () => {
-    const well = bench('second', 0.04, 23)(times(8, 7200));
-    const plan = discriminatingTimes(well, { shortestIntervalS: 900, longestRunS: 7200 })!;
-    expect(plan.by).toBe('noise');
-    expect(plan.noiseShare).toBeLessThan(1);
-    expect(plan.replicates).toBe(Math.ceil(plan.noiseShare! ** -2 - 1e-9));
+  it('give way to replicates where no time helps, which then decide together', () => {
+    const run = bench('first', 0.02, 23);
+    const fixed = { shortestIntervalS: 900, longestRunS: 7200 };
+    const plans = Array.from({ length: 12 }, () => discriminatingTimes(run(times(8, 7200)), fixed));
+    const [plan] = plans.filter((one) => one?.by === 'noise');
+    expect(plan!.replicates).toBe(Math.ceil(plan!.noiseShare! ** -2 - 1e-9));
+    const verdicts = Array.from({ length: 20 }, () => {
+      const wells = Array.from({ length: plan!.replicates! }, () => run(plan!.timesS));
+      const series = wells.map(({ series: one }, i) => ({ ...one, id: `well ${i}` }));
+      return analyseScreen(series, nowhere).catalysts[0]!.verdict;
+    });
+    expect(verdicts.filter((verdict) => verdict === 'first').length).toBeGreaterThan(13);
+  });
+
+  it('are none where neither times nor readings nor replicates help', () => {
+    const well = bench('second', 0.08, 23)(times(6, 3600));
+    const plan = discriminatingTimes(well, { shortestIntervalS: 720, longestRunS: 3600 })!;
+    expect(plan).toMatchObject({ by: 'none', replicates: null, noiseShare: null });
   });
 
   it('come earlier for a reaction that is over at its second reading', () => {
