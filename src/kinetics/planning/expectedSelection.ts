@@ -24,7 +24,7 @@ export interface ExpectedSelection {
 
 /**
  * Normal quantile by which every condition is held on the safe side. At 0 about half of the runs
- * would settle; with this one about four in five or more do, by the simulation in
+ * would settle; with this one seven to nine in ten do, by the simulation in
  * tests/unit/kinetics/planning/discriminatingTimes.test.ts.
  */
 const SAFETY = 1.28;
