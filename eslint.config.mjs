@@ -86,6 +86,7 @@ export default defineConfig(
       'src/workbooks/**',
       'src/contracts/**',
       'src/demo/**',
+      'src/calibration/**',
     ],
     rules: {
       'no-restricted-globals': ['error', 'process', 'fetch', 'setTimeout', 'localStorage'],
@@ -112,6 +113,12 @@ export default defineConfig(
     ['src/workbooks/**'],
     ['contracts', ...outer],
     'workbooks stands on kinetics and screening.',
+  ),
+  gate(
+    ['src/calibration/**'],
+    ['screening', 'workbooks', 'contracts', ...outer],
+    'calibration stands on kinetics only.',
+    impure,
   ),
   gate(['src/contracts/**'], outer, 'contracts stands on the pure folders only.', impure),
   gate(

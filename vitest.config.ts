@@ -10,7 +10,12 @@ export default getViteConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/unit/**/*.test.ts', 'tests/unit/**/*.test.tsx'] },
+        test: {
+          name: 'unit',
+          include: ['tests/unit/**/*.test.ts', 'tests/unit/**/*.test.tsx'],
+          // Simulations of thousands of wells, on a slow machine too.
+          testTimeout: 30_000,
+        },
       },
       {
         extends: true,

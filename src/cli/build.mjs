@@ -29,6 +29,8 @@ export async function buildWorkers(folder) {
     ...options,
     entryPoints: entries.map((name) => join(source, name)),
     outdir: join(folder, 'workers'),
+    // The pool has to recognise what its own `move` has marked.
+    external: ['piscina'],
     banner: { js: banner },
   });
 }

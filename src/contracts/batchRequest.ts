@@ -129,12 +129,17 @@ function repeatedIds(list: readonly unknown[]): BatchFault[] {
   return faults;
 }
 
+/** Dimensions do not hang on the readings themselves. */
+const noTimes = { values: [], unit: 's' as const };
+
 function mixedDimensions(series: readonly (BatchSeries | null)[]): BatchFault[] {
   const first = new Map<string, { dimension: string; index: number }>();
   const faults: BatchFault[] = [];
   series.forEach((one, i) => {
     if (one?.catalyst === undefined) return;
-    const dimension = resultDimension(decaySeriesOf(one));
+    const dimension = resultDimension(
+      decaySeriesOf({ ...one, time: noTimes, reading: { ...one.reading, values: [] } }),
+    );
     const earlier = first.get(one.catalyst);
     if (earlier === undefined) first.set(one.catalyst, { dimension, index: i });
     else if (earlier.dimension !== dimension) {

@@ -1,4 +1,4 @@
-import { baseUnit, rateUnit } from '../kinetics/rateLaws/rateConstantUnit';
+import { baseUnit, rateUnit, reciprocalUnit } from '../kinetics/rateLaws/rateConstantUnit';
 import type {
   CatalystAnalysis,
   Estimate,
@@ -28,7 +28,11 @@ type WithErrorAndLimits = WithError & WithLimits;
 export type BatchFit = Pick<
   LawFit,
   'k' | 'kSe' | 'kRel' | 'kRelSe' | 'c0' | 'c0Se' | 'rss' | 'aicc' | 'weight'
->;
+> & {
+  /** Adsorption constant; only with the saturating law. */
+  K?: number | null;
+  KSe?: number | null;
+};
 
 export interface BatchSeriesResult {
   id: string;
@@ -41,7 +45,7 @@ export interface BatchSeriesResult {
   K: WithError | null;
   c0: WithError | null;
   /** After the blank. */
-  net: null;
+  net: { k: WithErrorAndLimits | null; initialRate: WithLimits | null } | null;
   conversion: number | null;
   initialRate: WithLimits | null;
   apparentOrder: { value: number; low: number | null; high: number | null } | null;
@@ -101,15 +105,18 @@ function inKilojoules(estimate: Estimate | null): WithErrorAndLimits | null {
   };
 }
 
-function fitOf({ k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight }: LawFit): BatchFit {
-  return { k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight };
+function fitOf(fit: LawFit): BatchFit {
+  const { k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight, saturation } = fit;
+  const own = { k, kSe, kRel, kRelSe, c0, c0Se, rss, aicc, weight };
+  return saturation === null ? own : { ...own, K: saturation.K, KSe: saturation.KSe };
 }
 
 function fitsOf(fits: SeriesAnalysis['fits']): BatchSeriesResult['fits'] {
   return Object.fromEntries(Object.entries(fits).map(([name, fit]) => [name, fitOf(fit)]));
 }
 
-function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
+/** A well's result as the batch contract answers it. */
+export function batchSeriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
   const { dimension } = analysis;
   const order = analysis.apparentOrder;
   return {
@@ -119,9 +126,15 @@ function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
     law: analysis.law,
     k: withBoth(analysis.k, analysis.kUnit),
     kRel: withError(analysis.kRel, 's^-1'),
-    K: null,
+    K: withError(analysis.adsorptionConstant, reciprocalUnit(dimension)),
     c0: withError(analysis.c0, baseUnit(dimension)),
-    net: null,
+    net:
+      analysis.net === null
+        ? null
+        : {
+            k: withBoth(analysis.net.k, analysis.kUnit),
+            initialRate: withLimits(analysis.net.initialRate, rateUnit(dimension)),
+          },
     conversion: analysis.conversion,
     initialRate: withLimits(analysis.initialRate, rateUnit(dimension)),
     apparentOrder: order === null ? null : { value: order.value, low: order.low, high: order.high },
@@ -131,7 +144,8 @@ function seriesResult(analysis: SeriesAnalysis): BatchSeriesResult {
   };
 }
 
-function catalystResult(result: CatalystAnalysis): BatchCatalystResult {
+/** A catalyst's result as the batch contract answers it. */
+export function batchCatalyst(result: CatalystAnalysis): BatchCatalystResult {
   const kRef = result.kUnit === null ? null : withLimits(result.kRef, result.kUnit);
   const at = result.kRefTemperatureK;
   return {
@@ -155,7 +169,7 @@ function catalystResult(result: CatalystAnalysis): BatchCatalystResult {
 export function batchResponse(analysis: ScreenAnalysis): BatchResponse {
   return {
     engine: analysis.engine,
-    series: analysis.series.map(seriesResult),
-    catalysts: analysis.catalysts.map(catalystResult),
+    series: analysis.series.map(batchSeriesResult),
+    catalysts: analysis.catalysts.map(batchCatalyst),
   };
 }

@@ -12,8 +12,6 @@ import {
   volumeUnits,
 } from '../kinetics/units';
 
-const NOT_YET = 'This version of the engine does not have it yet';
-
 const known = (name: string, units: readonly string[]) =>
   `${name} is not known here; use one of ${units.join(', ')}`;
 
@@ -38,22 +36,17 @@ const quantity = <const U extends readonly string[]>(units: U, value: z.ZodType<
 const temperature = quantity(temperatureUnits);
 const concentration = quantity([...concentrationUnits, ...pressureUnits], positive);
 
-const lawNames = ['auto', 'zero', 'first', 'second'] as const;
+const lawNames = ['auto', 'zero', 'first', 'second', 'saturating'] as const;
 
-/** The law asked for; `saturating` belongs to the contract, but not to this engine. */
+/** The law asked for. */
 const law = z.union(
   [z.enum(lawNames), z.strictObject({ order: z.number().min(LOWEST_ORDER).max(HIGHEST_ORDER) })],
   {
-    error: ({ input }) =>
-      input === 'saturating'
-        ? `${NOT_YET}: use auto, zero, first, second or {"order": n}`
-        : `Must be auto, zero, first, second, saturating or {"order": n} with n from ${LOWEST_ORDER} to ${HIGHEST_ORDER}`,
+    error: `Must be auto, zero, first, second, saturating or {"order": n} with n from ${LOWEST_ORDER} to ${HIGHEST_ORDER}`,
   },
 );
 
-const flagNotYet = z
-  .boolean({ error: 'Must be true or false' })
-  .refine((value) => !value, { error: `${NOT_YET}: leave it out or send false` });
+const flag = z.boolean({ error: 'Must be true or false' });
 
 /** What readings of one kind need besides; taken beside the reading or inside it. */
 const kindOptions = {
@@ -62,7 +55,7 @@ const kindOptions = {
   /** C0 of `conversion` readings. */
   initialConcentration: concentration.optional(),
   /** Fits a baseline under a `signal`. */
-  baseline: flagNotYet.optional(),
+  baseline: flag.optional(),
 };
 
 /** One well of a batch. */
@@ -109,7 +102,7 @@ export const batchSeriesSchema = z.strictObject(
     nu: positive.optional(),
     law: law.optional(),
     /** Fits a level that stays. */
-    residual: flagNotYet.optional(),
+    residual: flag.optional(),
     ...kindOptions,
   },
   { error: 'Must be an object' },

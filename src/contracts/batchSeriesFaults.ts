@@ -73,6 +73,20 @@ export function findSeriesFaults(entry: unknown, index: number): BatchFault[] {
       'unit',
     );
   }
+  if (entry.residual === true && entry.law === 'saturating') {
+    fault(
+      'A level that stays is fitted beside laws that have an order, not beside saturation',
+      'residual',
+    );
+  }
+  const baseline = fieldOf(entry, 'reading', 'baseline') ?? entry.baseline;
+  if (baseline === true && kind !== 'signal') {
+    const keys = 'baseline' in entry ? ['baseline'] : ['reading', 'baseline'];
+    fault('Only a signal has a baseline; use residual for a level that stays', ...keys);
+  }
+  if (baseline === true && entry.law === 'saturating') {
+    fault('A baseline is fitted beside laws that have an order, not beside saturation', 'law');
+  }
   for (const option of options) {
     const inside = fieldOf(entry, 'reading', option);
     if (option in entry && inside !== undefined) {

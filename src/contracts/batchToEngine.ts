@@ -38,6 +38,7 @@ export function decaySeriesOf(series: BatchSeries): DecaySeries {
     siteDensityMolPerKg: density ? toMolPerKg(density.value, density.unit) : null,
     nu: series.nu ?? 1,
     law: series.law ?? 'auto',
+    level: series.residual === true || (series.baseline ?? reading.baseline) === true,
   };
 }
 

@@ -6,6 +6,7 @@ import type {
   WarningCode,
 } from '../kinetics/types';
 import type { HeatmapCell } from '../screening/heatmap';
+import type { Rankings } from '../screening/rankedMeasures';
 import type { DecisionState } from './decisions';
 
 export type { HeatmapCell };
@@ -43,8 +44,8 @@ export interface LeaderboardRow {
   warnings: { code: WarningCode; sentence: string }[];
   /** One sentence that says why the verdict is what it is. */
   explanation: string;
-  /** True when its rate cannot be told from the highest one's. */
-  tiedWithBest: boolean;
+  /** Its place by each measure with a 95 % rank interval, and the chance to be among the first. */
+  ranks: Rankings;
   tags: string[];
   decision: { state: DecisionState; version: number };
   screenId: string;

@@ -1,6 +1,6 @@
 import type { WellRole } from '../kinetics/types';
 import { simulateDecay } from './decay';
-import type { RandomStream } from './random';
+import type { RandomStream } from '../kinetics/statistics/randomStream';
 import type { CatalystTruth, GeneratedWell } from './types';
 
 export interface ScreenDesign {

@@ -1,7 +1,7 @@
 import { writeWorkbook } from '../workbooks/writeWorkbook';
 import { MARLBECK_CARDS } from './cards';
 import { generateScreen, type ScreenDesign } from './generateScreen';
-import { randomStream } from './random';
+import { randomStream } from '../kinetics/statistics/randomStream';
 import { screenSheets } from './screenSheets';
 import { MARLBECK_BENCHMARK, MARLBECK_TRUTHS, SAMPLE_TRUTHS } from './truths';
 import type { DemoCampaign, GeneratedWell } from './types';

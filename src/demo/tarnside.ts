@@ -1,7 +1,7 @@
 import { writeWorkbook } from '../workbooks/writeWorkbook';
 import { TARNSIDE_CARDS } from './cards';
 import { generateScreen } from './generateScreen';
-import { randomStream } from './random';
+import { randomStream } from '../kinetics/statistics/randomStream';
 import { screenSheets } from './screenSheets';
 import { TARNSIDE_BENCHMARK, TARNSIDE_TRUTHS } from './truths';
 import type { DemoCampaign } from './types';

@@ -1,13 +1,14 @@
-import { residualsOf } from './fitting/fitLaw';
+import { profileRateConstant } from './fitting/profileInterval';
 import type { Readings } from './fitting/readings';
 import { collectReadings, resultDimension } from './fitting/readings';
-import { requestedRateLaw } from './rateLaws/registry';
+import { requestedLaw } from './rateLaws/registry';
 import { estimate, finiteOrNull } from './statistics/estimate';
 import { intervalFactor } from './statistics/tDistribution';
 import type { DecaySeries, Estimate, SeriesAnalysis, WarningCode } from './types';
 import { averageInitialRate } from './verdict/averageInitialRate';
 import { testForDecay, type DecayTest } from './verdict/decayTest';
-import { fitWell, type FittedLaw, type WellFits } from './verdict/fitWell';
+import { residualsOfLaw, unitOfK, type FittedLaw } from './verdict/fittedLaw';
+import { fitWell, type WellFits } from './verdict/fitWell';
 import { testLackOfFit } from './verdict/lackOfFit';
 import { findOutliers } from './verdict/outliers';
 import {
@@ -40,13 +41,13 @@ const WIDEST_ORDER = 5;
  * Analyses one well: fits, verdict, rate constant and initial rate.
  *
  * @throws RangeError when times and values differ in length, the temperature is not above 0 K, or
- *   the forced law is not held by this engine
+ *   a forced order is out of range
  */
 export function analyseWell(series: DecaySeries): AnalysedWell {
   if (!(series.temperatureK > 0)) {
     throw new RangeError(`temperatureK must be above 0, got ${series.temperatureK}`);
   }
-  const forced = requestedRateLaw(series.law);
+  const forced = requestedLaw(series.law);
   const readings = collectReadings(series);
   const blank = emptyAnalysis(series, readings);
   const few = readings.values.length < FEWEST_READINGS;
@@ -63,12 +64,11 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
   }
 
   const fits = fitWell(series, readings, forced);
-  const first = fits.laws.find((fitted) => fitted.law.order === 1)!;
   const decay = testForDecay(
     readings,
     series.kind,
-    first.relative.rss,
-    first.relative.kRel === null || first.relative.kRel > 0,
+    fits.plainFirst.rss,
+    fits.plainFirst.kRel === null || fits.plainFirst.kRel > 0,
   );
   if (decay.outcome !== 'decays') return describeDeadWell(series, readings, blank, fits, decay);
 
@@ -77,16 +77,13 @@ export function analyseWell(series: DecaySeries): AnalysedWell {
       ? {
           verdict: 'undetermined',
           order: null,
-          best: bestOf(fits).law.name,
+          law: null,
+          best: bestOf(fits).name,
           warnings: ['too-few-for-order'],
         }
       : selectRateLaw(fits.evidence, fits.apparentOrder);
-  const asserted =
-    forced ??
-    (selection.order === null
-      ? null
-      : (fits.laws.find((fitted) => fitted.law.name === selection.verdict)?.law ?? null));
-  const shown = fits.laws.find((fitted) => fitted.law === asserted) ?? bestOf(fits);
+  const asserted = forced?.name ?? selection.law;
+  const shown = fits.laws.find((fitted) => fitted.name === asserted) ?? bestOf(fits);
   const analysis = describeReactingWell(series, readings, blank, fits, selection, shown);
   return {
     series,
@@ -119,9 +116,12 @@ function emptyAnalysis(series: DecaySeries, readings: Readings): SeriesAnalysis 
     k: null,
     kUnit: null,
     kRel: null,
+    adsorptionConstant: null,
     c0: null,
+    level: null,
     conversion: null,
     initialRate: null,
+    net: null,
     apparentOrder: null,
     fits: {},
     shownLaw: null,
@@ -142,7 +142,7 @@ function describeDeadWell(
   fits: WellFits,
   decay: DecayTest,
 ): AnalysedWell {
-  const zero = fits.laws.find((fitted) => fitted.law.order === 0)!;
+  const zero = fits.laws.find((fitted) => fitted.law?.order === 0)!;
   const perReading =
     series.kind === 'product'
       ? 1 / series.productPerReactant
@@ -159,8 +159,8 @@ function describeDeadWell(
     fits: fits.byName,
     shownLaw: 'zero',
     residualSd: zero.fit.residualSd,
-    lackOfFit: testLackOfFit(residualsOf(zero.relative), zero.relative.problem.valueScale),
-    outliers: findOutliers(zero.relative, readings.indices),
+    lackOfFit: testLackOfFit(residualsOfLaw(zero), fits.unit),
+    outliers: findOutliers(zero, fits.unit, readings.indices),
     warnings: [...blank.warnings],
   };
   if (decay.outcome === 'rises') analysis.warnings.push('rising');
@@ -184,12 +184,13 @@ function describeReactingWell(
   shown: FittedLaw,
 ): SeriesAnalysis {
   const isForced = series.law !== 'auto';
-  const lackOfFit = testLackOfFit(residualsOf(shown.relative), shown.relative.problem.valueScale);
-  const misses = !isForced && selection.order !== null && lackOfFit.significant;
-  const isAsserted = isForced || (selection.order !== null && !misses);
-  const { fit, law, initialRate } = shown;
+  const lackOfFit = testLackOfFit(residualsOfLaw(shown), fits.unit);
+  const misses = !isForced && selection.law !== null && lackOfFit.significant;
+  const isAsserted = isForced || (selection.law !== null && !misses);
+  const { fit, initialRate } = shown;
   const warnings: WarningCode[] = [...blank.warnings];
   if (!isForced) warnings.push(...selection.warnings);
+  if (series.level === true) warnings.push('level-by-request');
   if (misses) warnings.push('no-simple-order');
   if (lackOfFit.significant) warnings.push('lack-of-fit');
   if (
@@ -203,32 +204,50 @@ function describeReactingWell(
     warnings.push('initial-concentration-needed');
   }
   if (fits.exact) warnings.push('exact-fit');
-  const outliers = findOutliers(shown.relative, readings.indices);
+  const outliers = findOutliers(shown, fits.unit, readings.indices);
   if (outliers.length > 0) warnings.push('outlier');
 
   const rates = fits.laws
-    .filter((fitted) => fitted.law.name !== 'order')
+    .filter((fitted) => fitted.name !== 'order')
     .map((fitted) => ({ ...fitted.initialRate, criterion: fitted.criterion }));
-  const k = isAsserted ? estimate(fit.k, fit.kSe, fit.dof) : null;
+  const k = isAsserted ? rateConstantOf(shown) : null;
   return {
     ...blank,
     verdict: isForced ? 'forced' : misses ? 'other' : selection.verdict,
-    order: isAsserted ? law.order : null,
+    order: isAsserted ? (shown.law?.order ?? null) : null,
     k,
-    kUnit: k === null ? null : law.kUnit(blank.dimension),
+    kUnit: k === null ? null : unitOfK(shown, blank.dimension),
+    adsorptionConstant:
+      isAsserted && fit.saturation !== null
+        ? estimate(fit.saturation.K, fit.saturation.KSe, fit.dof)
+        : null,
     kRel: isAsserted ? estimate(fit.kRel, fit.kRelSe, fit.dof) : null,
     c0: estimate(fit.c0, fit.c0Se, fit.dof),
+    level: fit.level === null ? null : estimate(fit.level.value, fit.level.se, fit.dof),
     conversion: shown.conversion,
     initialRate: isAsserted
       ? estimate(initialRate.value, initialRate.se, fit.dof)
       : averageInitialRate(rates, fit.dof),
     apparentOrder: freeOrderEstimate(fits.apparentOrder),
     fits: fits.byName,
-    shownLaw: law.name,
+    shownLaw: shown.name,
     residualSd: finiteOrNull(fit.residualSd),
     lackOfFit,
     outliers,
     warnings,
+  };
+}
+
+/** k with its interval: by profile where the plain one misleads. */
+function rateConstantOf({ fit, relative }: FittedLaw): Estimate | null {
+  const plain = estimate(fit.k, fit.kSe, fit.dof);
+  if (plain?.se == null || relative === null || !(plain.value > 0)) return plain;
+  const profile = profileRateConstant(relative, plain.se / plain.value);
+  if (profile === null) return plain;
+  return {
+    ...plain,
+    low: plain.value * profile.low,
+    high: profile.high === null ? null : finiteOrNull(plain.value * profile.high),
   };
 }
 

@@ -1,6 +1,7 @@
 import { lnRateConstantAt } from './catalyst/fitArrhenius';
 import { findRateLaw, rateLawOf } from './rateLaws/registry';
 import type { RateLaw } from './rateLaws/rateLaw';
+import { saturatingShape } from './rateLaws/saturating';
 import { intervalFactor } from './statistics/tDistribution';
 import type { ArrheniusLine, LawFit, RateLawName, SeriesAnalysis } from './types';
 
@@ -30,35 +31,121 @@ export function evaluateFit(
   fit: LawFit,
   timesS: readonly number[],
 ): BandedCurve | null {
-  const law = rateLawOf(name, owner.order);
-  if (law === null) return null;
   const growing = owner.kind !== 'reactant' && owner.kind !== 'signal';
   const factor = owner.kind === 'product' ? owner.productPerReactant : 1;
+  const curve = curveOf(name, owner.order, fit);
+  if (curve === null) return null;
+  if (fit.level !== null && fit.kRel !== null) return leveledCurve(curve, growing, fit, timesS);
   if (fit.kRel === null) return straightGrowth(fit, factor, timesS);
   const amplitude = owner.kind === 'conversion' ? 1 : fit.c0;
   if (amplitude === null) return null;
 
   const t = fit.dof > 0 ? intervalFactor(fit.dof) : null;
+  const covariance = shapeCovariance(fit, owner.kind === 'conversion');
+  const sign = growing ? -1 : 1;
   const values: number[] = [];
   const half: (number | null)[] = [];
   for (const time of timesS) {
     const since = growing ? Math.max(time - fit.originS, 0) : time - fit.originS;
-    const u = fit.kRel * since;
-    const shape = growing ? law.converted(u) : law.relative(u);
-    const byRate = amplitude * since * law.slope(u) * (growing ? -1 : 1);
+    const at = curve(since);
+    const shape = growing ? at.converted : at.relative;
+    const gradient = [
+      shape,
+      sign * amplitude * at.byRate,
+      ...(at.byCoverage === null ? [] : [sign * amplitude * at.byCoverage]),
+    ];
     values.push(factor * amplitude * shape);
-    const variance = curveVariance(owner.kind === 'conversion', fit, shape, byRate);
+    const variance = covariance === null ? null : quadratic(gradient, covariance);
     half.push(t === null || variance === null ? null : t * factor * Math.sqrt(variance));
   }
   return banded(values, half);
 }
 
-function curveVariance(fixed: boolean, fit: LawFit, shape: number, byRate: number): number | null {
+/** A curve that approaches a level, in the unit of the readings. */
+function leveledCurve(
+  curve: (sinceS: number) => CurvePoint,
+  growing: boolean,
+  fit: LawFit,
+  timesS: readonly number[],
+): BandedCurve {
+  const { amplitude, offset, covariance } = fit.level!;
+  const t = fit.dof > 0 ? intervalFactor(fit.dof) : null;
+  const sign = growing ? -1 : 1;
+  const points = timesS.map((time) =>
+    curve(growing ? Math.max(time - fit.originS, 0) : time - fit.originS),
+  );
+  const shapes = points.map((at) => (growing ? at.converted : at.relative));
+  return banded(
+    shapes.map((shape) => amplitude * shape + offset),
+    points.map((at, i) =>
+      t === null || covariance === null
+        ? null
+        : t *
+          Math.sqrt(
+            quadratic([shapes[i]!, sign * amplitude * at.byRate, growing ? 0 : 1], covariance),
+          ),
+    ),
+  );
+}
+
+/** C/c0 at a time after the fit's origin, with its derivatives. */
+interface CurvePoint {
+  relative: number;
+  /** 1 − relative, without cancellation. */
+  converted: number;
+  byRate: number;
+  /** By σ; null for laws that have an order. */
+  byCoverage: number | null;
+}
+
+function curveOf(
+  name: RateLawName,
+  order: number | null,
+  { kRel, saturation }: LawFit,
+): ((sinceS: number) => CurvePoint) | null {
+  const rate = kRel ?? 0;
+  if (name !== 'saturating') {
+    const law = rateLawOf(name, order);
+    if (law === null) return null;
+    return (since) => ({
+      relative: law.relative(rate * since),
+      converted: law.converted(rate * since),
+      byRate: since * law.slope(rate * since),
+      byCoverage: null,
+    });
+  }
+  if (saturation === null) return null;
+  const { coverage } = saturation;
+  const shape = saturatingShape(coverage);
+  return (since) => {
+    const lnW = shape.lnRelative(rate * since);
+    const w = Math.exp(lnW);
+    const slope = shape.slope(rate * since);
+    return {
+      relative: w,
+      converted: -Math.expm1(lnW),
+      byRate: since * slope,
+      byCoverage: w === 0 ? 0 : -slope * (1 - w + lnW),
+    };
+  };
+}
+
+/** Covariance of (c0, kRel[, σ]), row by row; null where the fit has none. */
+function shapeCovariance(fit: LawFit, fixedAmplitude: boolean): readonly number[] | null {
+  if (fit.saturation !== null) return fit.saturation.covariance;
   if (fit.kRelSe === null) return null;
-  const own = byRate ** 2 * fit.kRelSe ** 2;
-  if (fixed) return own;
+  const kk = fit.kRelSe ** 2;
+  if (fixedAmplitude) return [0, 0, 0, kk];
   if (fit.c0Se === null || fit.covariance === null) return null;
-  return Math.max(own + 2 * shape * byRate * fit.covariance + shape ** 2 * fit.c0Se ** 2, 0);
+  return [fit.c0Se ** 2, fit.covariance, fit.covariance, kk];
+}
+
+/** gᵀ V g, at least 0. */
+function quadratic(gradient: readonly number[], covariance: readonly number[]): number {
+  const n = gradient.length;
+  let sum = 0;
+  gradient.forEach((a, i) => gradient.forEach((b, j) => (sum += a * b * covariance[n * i + j]!)));
+  return Math.max(sum, 0);
 }
 
 function straightGrowth(

@@ -41,13 +41,29 @@ const WARNINGS: Record<WarningCode, string> = {
   'order-changes-with-temperature':
     'Different temperatures assert different orders, as when coverage of the surface changes; one activation energy would mix two regimes, so look at the temperatures apart.',
   'arrhenius-curved':
-    'The Arrhenius plot bends; transport, loss of activity or a second path may take over at one end: fit the straight part, and vary stirring and catalyst mass.',
+    'The Arrhenius plot bends, so one activation energy does not hold over the whole range; fit the straight part alone.',
+  'arrhenius-bends-down':
+    'The rate falls behind at the hot end; transport, loss of activity, equilibrium or desorption can do this: vary stirring and catalyst mass there, and repeat the lowest temperature last.',
+  'arrhenius-bends-up':
+    'The rate runs ahead of the line at the ends; a second path may take over when hot, or the blank set the rate when cold: measure the blank at each temperature.',
+  'pore-diffusion':
+    'The upper temperatures show about half the activation energy of the lower ones, as when diffusion in the pores sets the rate; crush the particles finer and repeat the hottest wells.',
+  'hot-wells-deactivate':
+    'The wells at the highest temperature fade like a catalyst that loses activity, the cooler ones do not; leave that temperature out of the line or shorten its runs.',
+  'one-step-disagrees':
+    'The fit of all readings at once gives another activation energy than the line through the single wells; look for wells that the law or the line misses.',
   'low-activation-energy':
     'The apparent activation energy is below 20 kJ/mol, as when transport to the particle sets the rate; vary stirring and particle size before reading chemistry into it.',
   'negative-activation-energy':
     'The rate falls with temperature; desorption of the reactant or loss of activity can do this: repeat the lowest temperature last.',
   'blank-reacts':
-    'A blank near these temperatures reacts too, and its share is still in these figures; compare the blank rate before ranking.',
+    'A blank near these temperatures reacts too, and its share is still in these figures; measure the blank at each temperature so that it can be taken off.',
+  'blank-subtracted':
+    'The blank reacts too; its rate was taken off, so figures are the catalyst’s own, but for the time to target, in which both work together.',
+  'not-above-blank':
+    'After the blank is taken off no rate is left; raise the loading, or find what reacts in the blank.',
+  'level-by-request':
+    'A level that stays was fitted as asked; k is that of the approach to it. Ask whether it is an inert remainder, an equilibrium or a baseline: time and rate at the reference are not given.',
   'extrapolated-temperature':
     'The reference temperature lies outside the measured ones, so figures there rest on the line alone; measure closer to it.',
   'extrapolated-concentration':

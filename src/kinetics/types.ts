@@ -59,6 +59,8 @@ export interface DecaySeries {
   /** Stoichiometric coefficient of the reactant followed, above 0. */
   nu: number;
   law: LawRequest;
+  /** Fits a level that stays: C∞, or the baseline of a signal. */
+  level?: boolean;
 }
 
 /** A number with its 95 % interval; null where it cannot be given. */
@@ -67,6 +69,30 @@ export interface Estimate {
   se: number | null;
   low: number | null;
   high: number | null;
+}
+
+/** What only the saturating law has, at the fit's `originS`. */
+export interface SaturatingConstants {
+  /** Adsorption constant, reciprocal base unit; null at a limit of the law. */
+  K: number | null;
+  KSe: number | null;
+  /** σ = K C0/(1 + K C0): 0 is first order, 1 zero order. */
+  coverage: number;
+  coverageSe: number | null;
+  /** Of (c0, kRel, coverage), row by row; null at a limit of the law. */
+  covariance: number[] | null;
+}
+
+/** A level that the curve approaches instead of 0. */
+export interface FittedLevel {
+  /** C∞, or the baseline of a signal, base unit; null for product, which does not tell it. */
+  value: number | null;
+  se: number | null;
+  /** The curve, in the unit of the readings: amplitude × shape + offset. */
+  amplitude: number;
+  offset: number;
+  /** Of (amplitude, kRel, offset), row by row. */
+  covariance: number[] | null;
 }
 
 /** One law fitted to one well. All keys are always present; what does not exist is null. */
@@ -95,6 +121,10 @@ export interface LawFit {
   /** sqrt(rss/dof), the reading's base unit; null when dof < 1. */
   residualSd: number | null;
   dof: number;
+  /** Null for every law but the saturating one. */
+  saturation: SaturatingConstants | null;
+  /** Null unless a level that stays, or a baseline, was asked for. */
+  level: FittedLevel | null;
 }
 
 /** Evidence that the best law still misses the readings. */
@@ -127,14 +157,28 @@ export type WarningCode =
   | 'two-temperatures'
   | 'order-changes-with-temperature'
   | 'arrhenius-curved'
+  | 'arrhenius-bends-down'
+  | 'arrhenius-bends-up'
+  | 'pore-diffusion'
+  | 'hot-wells-deactivate'
+  | 'one-step-disagrees'
   | 'low-activation-energy'
   | 'negative-activation-energy'
   | 'blank-reacts'
+  | 'blank-subtracted'
+  | 'not-above-blank'
+  | 'level-by-request'
   | 'extrapolated-temperature'
   | 'extrapolated-concentration'
   | 'few-wells'
   | 'no-reacting-wells'
   | 'reacts-only-together';
+
+/** What is left of a well's figures after the blank, in the same units. */
+export interface NetOfBlank {
+  k: Estimate | null;
+  initialRate: Estimate | null;
+}
 
 /** The engine's answer for one well. Serialisable: no NaN, no undefined. */
 export interface SeriesAnalysis {
@@ -157,12 +201,18 @@ export interface SeriesAnalysis {
   kUnit: string | null;
   /** s⁻¹. */
   kRel: Estimate | null;
+  /** Adsorption constant of the saturating law, reciprocal base unit. */
+  adsorptionConstant: Estimate | null;
   /** Base unit. */
   c0: Estimate | null;
+  /** C∞ or baseline, base unit; only where it was asked for. */
+  level: Estimate | null;
   /** 1 − C_fit(t_last)/C_fit(t_first), not clamped; null when unusable. */
   conversion: number | null;
   /** Base unit s⁻¹ at the first reading; kept for undetermined wells too. */
   initialRate: Estimate | null;
+  /** Null where no blank covers the temperature, and for blanks and controls. */
+  net: NetOfBlank | null;
   /** Free order n of −dC/dt = k Cⁿ; null when the readings do not hold it. */
   apparentOrder: Estimate | null;
   fits: Partial<Record<RateLawName, LawFit>>;
@@ -220,6 +270,46 @@ export interface ArrheniusLine {
   points: ArrheniusPoint[];
 }
 
+/** How strongly a saturating catalyst holds the reactant. */
+export interface Adsorption {
+  /** Adsorption constant at `temperatureK`, reciprocal base unit. */
+  K: Estimate;
+  temperatureK: number;
+  /** Apparent ΔH_ads, J/mol, from ln K = ln K_c − (ΔH_ads/R)(1/T − 1/T_c). */
+  enthalpy: Estimate | null;
+}
+
+/** All readings of a catalyst fitted at once, ln k on a straight line against 1/T. */
+export interface OneStep {
+  /** J/mol; the interval allows for the scatter of wells and blocks. */
+  activationEnergy: Estimate;
+  /** J/mol: standard error from the noise of the readings alone. */
+  readingSe: number | null;
+  /** ln of k (of kRel where k is not known) at `centreK`, at the pooled loading. */
+  lnKc: number;
+  lnKcSe: number | null;
+  /** K. */
+  centreK: number;
+  /** J/mol; only of the saturating law. */
+  adsorptionEnthalpy: Estimate | null;
+  /** ln of K at `centreK`; only of the saturating law. */
+  lnAdsorptionConstant: number | null;
+  wells: number;
+  readings: number;
+  /** This energy or that of the single wells lies outside the other's interval. */
+  disagreesWithTwoStep: boolean;
+}
+
+/** Apparent activation parameters of a first-order constant per site. */
+export interface ActivationParameters {
+  /** ΔH‡, J/mol. */
+  enthalpy: Estimate;
+  /** ΔS‡, J mol⁻¹ K⁻¹, standard state 1 mol/L. */
+  entropy: Estimate;
+  /** K, where both hold. */
+  temperatureK: number;
+}
+
 /** The engine's answer for one catalyst over all its wells. */
 export interface CatalystAnalysis {
   catalyst: string;
@@ -245,6 +335,10 @@ export interface CatalystAnalysis {
   turnoverFrequency: Estimate | null;
   /** s. */
   timeToTarget: Estimate | null;
+  /** Null unless the saturating law holds and K is known. */
+  adsorption: Adsorption | null;
+  /** Null unless first order, with known loading and site density. */
+  eyring: ActivationParameters | null;
   /** True when rateRef and timeToTarget are brackets between orders 0 and 2. */
   bracket: boolean;
   /** g/L that k was brought to; null when per well. */
@@ -262,6 +356,8 @@ export interface CatalystAnalysis {
   /** Evidence over all its wells: Akaike weights of the laws fitted jointly. */
   weights: Partial<Record<RateLawName, number>>;
   warnings: WarningCode[];
+  /** Null without a law, below 2 temperatures, and where a blank was taken off. */
+  oneStep: OneStep | null;
 }
 
 /** One run of the engine. */

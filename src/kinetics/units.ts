@@ -12,6 +12,7 @@ const LOADING_UNITS = { 'g/L': 1, 'mg/L': 1e-3, 'mg/mL': 1, 'kg/L': 1e3 } as con
 const CONCENTRATION_UNITS = { 'mol/L': 1, 'mmol/L': 1e-3, 'umol/L': 1e-6 } as const;
 const PRESSURE_UNITS = { Pa: 1, kPa: 1e3, bar: 1e5, mbar: 100 } as const;
 const RATIO_UNITS = { '1': 1, '%': 0.01 } as const;
+const READING_UNITS = { ...CONCENTRATION_UNITS, ...PRESSURE_UNITS, ...RATIO_UNITS };
 
 export type TemperatureUnit = 'K' | 'degC';
 export type TimeUnit = keyof typeof TIME_UNITS;
@@ -79,5 +80,5 @@ export function dimensionOf(unit: ReadingUnit): ReadingDimension {
 
 /** A reading in the base unit of its dimension: mol/L, Pa or 1. */
 export function toBaseReading(value: number, unit: ReadingUnit): number {
-  return scale(value, { ...CONCENTRATION_UNITS, ...PRESSURE_UNITS, ...RATIO_UNITS }[unit]);
+  return scale(value, READING_UNITS[unit]);
 }

@@ -2,8 +2,8 @@ import type { SeriesAnalysis } from '../kinetics/types';
 
 interface Readings {
   id: string;
-  timesS: number[];
-  values: (number | null)[];
+  timesS: readonly number[];
+  values: readonly (number | null)[];
 }
 
 /**

@@ -9,10 +9,9 @@ import {
 } from '../db/repositories/analyses';
 import { findCampaign, listCatalysts } from '../db/repositories/campaigns';
 import { findScreen, listWells } from '../db/repositories/screens';
-import type { ReferenceConditions, ScreenAnalysis } from '../kinetics/types';
-import { thinDecay } from '../screening/sparkline';
+import type { ReferenceConditions } from '../kinetics/types';
+import type { WrittenScreen } from '../workers/gatherParts';
 import { decaySeriesOfScreen } from './decaySeries';
-import { unpackFloats } from './readingsCodec';
 import type { WorkerPools } from './workerPools';
 
 export interface ProgressEvent {
@@ -106,52 +105,30 @@ export class AnalysisRunner {
 
   async #store(
     analysis: Pick<AnalysisRow, 'id' | 'groupId' | 'screenId'>,
-    result: ScreenAnalysis,
+    result: WrittenScreen,
   ): Promise<void> {
     const { id, groupId, screenId } = analysis;
     const screen = await findScreen(this.#db, [groupId], screenId);
     if (!screen) throw new Error('its screen is gone');
-    const [cards, wells] = await Promise.all([
-      listCatalysts(this.#db, groupId, screen.screen.campaignId),
-      listWells(this.#db, groupId, screenId),
-    ]);
+    const cards = await listCatalysts(this.#db, groupId, screen.screen.campaignId);
     const idOfCode = new Map(cards.map((card) => [card.code, card.id]));
-    const wellOfId = new Map(wells.map((one) => [one.well.id, one.well]));
-    const readingsOf = (wellId: string) => {
-      const well = wellOfId.get(wellId);
-      return well
-        ? {
-            timesS: unpackFloats(well.timesS).map((time) => time ?? 0),
-            values: unpackFloats(well.readings),
-          }
-        : null;
-    };
     await this.#db.transaction(async (tx) => {
       await insertWellFits(
         tx,
-        result.series.map((series) => ({
+        result.series.map(({ name, verdict, json }) => ({
           groupId,
           analysisId: id,
-          wellId: series.id,
-          verdict: series.verdict,
-          result: JSON.stringify(series),
+          wellId: name,
+          verdict,
+          result: json,
         })),
       );
       await insertCatalystResults(
         tx,
-        result.catalysts.map((catalyst) => {
-          const catalystId = idOfCode.get(catalyst.catalyst);
-          if (!catalystId) throw new Error(`catalyst ${catalyst.catalyst} has no card`);
-          const members = new Set(catalyst.seriesIds);
-          const decays = result.series.filter((series) => members.has(series.id));
-          return {
-            groupId,
-            analysisId: id,
-            catalystId,
-            verdict: catalyst.verdict,
-            result: JSON.stringify(catalyst),
-            sparkline: JSON.stringify(thinDecay(decays, readingsOf, 16)),
-          };
+        result.catalysts.map(({ name, verdict, json, sparkline = '[]' }) => {
+          const catalystId = idOfCode.get(name);
+          if (!catalystId) throw new Error(`catalyst ${name} has no card`);
+          return { groupId, analysisId: id, catalystId, verdict, result: json, sparkline };
         }),
       );
       await updateAnalysis(tx, groupId, id, {

@@ -4,14 +4,13 @@ import type { Database } from '../db/client';
 import { listCandidateStates, listTags } from '../db/repositories/candidates';
 import { explainCatalyst, explainWarning } from '../kinetics';
 import type { CatalystAnalysis } from '../kinetics/types';
-import { tiedWithBest } from '../screening/ranking';
 import { requireCampaign, summariseCampaign } from './campaigns';
 import { loadCurrentAnalyses, loadCurrentResults, type CurrentResult } from './currentAnalyses';
+import { rankingsOf } from './rankings';
 
-type Unplaced = Omit<LeaderboardRow, 'tiedWithBest' | 'tags' | 'decision'>;
+type Unplaced = Omit<LeaderboardRow, 'ranks' | 'tags' | 'decision'>;
 
-function rowOf({ row, otherScreens }: CurrentResult): Unplaced {
-  const result = JSON.parse(row.result) as CatalystAnalysis;
+function rowOf({ row, otherScreens }: CurrentResult, result: CatalystAnalysis): Unplaced {
   return {
     catalystId: row.catalystId,
     code: row.code,
@@ -61,15 +60,27 @@ export async function viewLeaderboard(
     listCandidateStates(db, groupId, campaignId),
     listTags(db, groupId, [...results.keys()]),
   ]);
-  const rows = [...results.values()].map(rowOf);
-  const ties = tiedWithBest(rows.map((row) => (row.bracket ? null : row.rateRef)));
+  const candidates = [...results.values()].map((current) => ({
+    current,
+    result: JSON.parse(current.row.result) as CatalystAnalysis,
+  }));
+  const ranks = rankingsOf(
+    campaignId,
+    current.finished.map((row) => row.analysis.id),
+    campaign.referenceTemperatureK,
+    candidates.map(({ current: { row }, result }) => ({
+      ...result,
+      catalystId: row.catalystId,
+      screenId: row.screenId,
+    })),
+  );
   return {
     campaign: summariseCampaign(campaign),
-    rows: rows.map((row, index) => ({
-      ...row,
-      tiedWithBest: ties[index] ?? false,
-      tags: tags.get(row.catalystId) ?? [],
-      decision: states.get(row.catalystId) ?? { state: 'open', version: 0 },
+    rows: candidates.map(({ current, result }) => ({
+      ...rowOf(current, result),
+      ranks: ranks.get(current.row.catalystId)!,
+      tags: tags.get(current.row.catalystId) ?? [],
+      decision: states.get(current.row.catalystId) ?? { state: 'open', version: 0 },
     })),
     pendingScreens: current.pending,
   };

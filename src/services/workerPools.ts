@@ -1,10 +1,12 @@
 import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
-import { MessageChannel } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import { problems } from '../errors';
-import type { DecaySeries, ReferenceConditions, ScreenAnalysis } from '../kinetics/types';
+import type { DecaySeries, ReferenceConditions } from '../kinetics/types';
 import type { ParsedWorkbook } from '../workbooks/types';
+import { blanksOf, divide, type PartAnswer, type PartSetting } from '../workers/answerPart';
+import type { OpenedBatch } from '../workers/batch.worker';
+import { gatherParts, type WrittenScreen } from '../workers/gatherParts';
 
 export interface BatchAnswer {
   status: number;
@@ -24,7 +26,7 @@ export interface WorkerPools {
   analyseScreen(
     input: ScreenInput,
     onProgress: (done: number, total: number) => void,
-  ): Promise<ScreenAnalysis>;
+  ): Promise<WrittenScreen>;
   /** @throws Problem 422 when reading takes too long or too much memory. */
   readWorkbook(bytes: Uint8Array, fileName: string): Promise<ParsedWorkbook>;
   close(): Promise<void>;
@@ -33,6 +35,11 @@ export interface WorkerPools {
 const workbookSeconds = 60;
 const workbookMegabytes = 512;
 const waitingBatches = 32;
+/** From this size on several threads share a batch, each some parts of it. */
+const largeBatchBytes = 250_000;
+const partsOfAThread = 4;
+/** Wells of a screen that one thread takes at a time. */
+const partSize = 64;
 
 function workbookTooHeavy(cause: unknown) {
   return problems.workbookFaults(
@@ -53,12 +60,35 @@ function workbookTooHeavy(cause: unknown) {
   );
 }
 
-/** Opens the pools on the bundled workers in `folder`; threads start when there is work. */
-export function openWorkerPools(folder: string): WorkerPools {
+/** Does work on each item, at most `atATime` under way; answers in the order of the items. */
+async function inTurn<T, R>(
+  items: readonly T[],
+  atATime: number,
+  work: (item: T) => Promise<R>,
+): Promise<R[]> {
+  const answers = new Array<R>(items.length);
+  let next = 0;
+  const lane = async () => {
+    while (next < items.length) {
+      const i = next;
+      next += 1;
+      answers[i] = await work(items[i]!);
+    }
+  };
+  await Promise.all(Array.from({ length: Math.min(atATime, items.length) }, lane));
+  return answers;
+}
+
+/**
+ * Opens the pools on the bundled workers in `folder`; threads start when there is work.
+ *
+ * @param threads that fit at a time; all cores unless given
+ */
+export function openWorkerPools(folder: string, threads = availableParallelism()): WorkerPools {
   const file = (name: string) => resolve(folder, `${name}.worker.mjs`);
   const engine = new Piscina({
     minThreads: 0,
-    maxThreads: availableParallelism(),
+    maxThreads: threads,
     idleTimeout: 60_000,
     maxQueue: waitingBatches,
   });
@@ -70,27 +100,48 @@ export function openWorkerPools(folder: string): WorkerPools {
     resourceLimits: { maxOldGenerationSizeMb: workbookMegabytes },
   });
 
+  const part = { filename: file('part') };
+  const batch = { filename: file('batch') };
+
   return {
     async answerBatch(bytes) {
       if (engine.queueSize >= waitingBatches) throw problems.busy();
-      return (await engine.run(bytes, {
-        filename: file('batch'),
-        transferList: [bytes.buffer],
-      })) as BatchAnswer;
-    },
-    async analyseScreen(input, onProgress) {
-      const { port1, port2 } = new MessageChannel();
-      port1.on('message', (message: { done: number; total: number }) => {
-        onProgress(message.done, message.total);
-      });
-      try {
-        return (await engine.run(
-          { ...input, port: port2 },
-          { filename: file('screen'), transferList: [port2] },
-        )) as ScreenAnalysis;
-      } finally {
-        port1.close();
+      if (bytes.byteLength < largeBatchBytes || threads < 2) {
+        return (await engine.run(bytes, { ...batch, transferList: [bytes.buffer] })) as BatchAnswer;
       }
+      const opened = (await engine.run(
+        { bytes, parts: threads * partsOfAThread },
+        { ...batch, name: 'open', transferList: [bytes.buffer] },
+      )) as OpenedBatch;
+      if ('refusal' in opened) return opened.refusal;
+      const answers = await inTurn(opened.parts, threads, async (packed) => {
+        const options = {
+          ...part,
+          name: 'runPacked',
+          transferList: [packed.buffer as ArrayBuffer],
+        };
+        return (await engine.run(packed, options)) as Uint8Array;
+      });
+      return (await engine.run(
+        { wells: opened.wells, answers },
+        {
+          ...batch,
+          name: 'close',
+          transferList: answers.map(({ buffer }) => buffer as ArrayBuffer),
+        },
+      )) as BatchAnswer;
+    },
+    async analyseScreen({ series, reference }, onProgress) {
+      const total = series.length;
+      const setting: PartSetting = { form: 'screen', reference, blanks: blanksOf(series) };
+      let done = 0;
+      const answers = await inTurn(divide(series, partSize), threads, async (one) => {
+        const answer = (await engine.run({ setting, part: one }, part)) as PartAnswer;
+        done += one.places.length;
+        onProgress(done, total);
+        return answer;
+      });
+      return gatherParts(total, answers);
     },
     async readWorkbook(bytes, fileName) {
       try {

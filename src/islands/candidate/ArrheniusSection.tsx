@@ -6,6 +6,7 @@ import type { ChartFrame, ChartTheme } from '../charts/chartTheme';
 import { plotNumber } from '../charts/plotNumber';
 import { arrheniusPlotOf } from './arrheniusPlot';
 import { figureOf } from './figures';
+import { OneStepNote } from './OneStepNote';
 
 export interface ArrheniusSectionProps {
   view: CandidateView;
@@ -44,6 +45,7 @@ export function ArrheniusSection({ view, chosen, onChoose }: ArrheniusSectionPro
             {figure.interval && ` (95 %: ${figure.interval})`}
             {result.basis === 'initial-rate' && ', of initial rates'}.
           </p>
+          <OneStepNote oneStep={result.oneStep ?? null} />
           <div className="mt-2 max-w-3xl">
             <Chart
               build={build}

@@ -109,7 +109,7 @@ function ListItem(props: {
   return (
     <li>
       <div className="flex items-start gap-2">
-        <span className="w-7 flex-none text-[13px]">
+        <span className="min-w-7 flex-none text-[13px]">
           <RankMark rank={rank} />
         </span>
         <a

@@ -75,8 +75,12 @@ export function LeaderboardTable(props: LeaderboardTableProps) {
         </colgroup>
         <thead>
           <tr aria-rowindex={1}>
-            <th scope="col" className="rank">
-              <span className="sr-only">Rank</span>
+            <th
+              scope="col"
+              className="rank"
+              title="Place, and in brackets the ranks it takes in 95 % of draws from the candidates’ uncertainties"
+            >
+              Rank
             </th>
             {visible.map((column) => (
               <ColumnHeader key={column.id} column={column} look={look} onSort={onSort} />

@@ -1,7 +1,7 @@
 import type { LeaderboardRow } from '../../contracts/leaderboard';
 import type { Estimate } from '../../kinetics/types';
 import { decisionStates } from '../../screening/decisions';
-import { tiedWithBest } from '../../screening/ranking';
+import { kGroupOf, type RankedMeasure } from '../../screening/rankedMeasures';
 import { printedUnit } from '../candidate/figures';
 import { verdicts, type LeaderboardLook, type SortId } from './address';
 import { keepsRow } from './filterRows';
@@ -16,6 +16,11 @@ export type LeaderboardLine =
 export interface Rank {
   place: number;
   tied: boolean;
+  /** 95 % rank interval; null where the figure has no error. */
+  low: number | null;
+  high: number | null;
+  /** 0 to 1: to be among the first few. */
+  chanceAmongFirst: number | null;
 }
 
 /** Rows that are compared with one another. */
@@ -41,15 +46,6 @@ const orderNames = new Map([
   [2, 'Second order'],
 ]);
 
-function invert({ value, se, low, high }: Estimate): Estimate {
-  return {
-    value: 1 / value,
-    se: se === null ? null : se / value ** 2,
-    low: high !== null && high > 0 ? 1 / high : null,
-    high: low !== null && low > 0 ? 1 / low : null,
-  };
-}
-
 /** Puts the rows of one section in order and says which cannot be told from the best. */
 function ranked(rows: readonly LeaderboardRow[], measure: Measure) {
   const { better, estimateOf } = measure;
@@ -59,12 +55,13 @@ function ranked(rows: readonly LeaderboardRow[], measure: Measure) {
     .sort((a, b) => (a.estimate.value - b.estimate.value) * (better === 'high' ? -1 : 1));
   const ranks = new Map<string, Rank>();
   if (better === null) return { rows: valued.map(({ row }) => row), ranks, leader: null };
-  const ties = tiedWithBest(
-    valued.map(({ estimate }) => (better === 'high' ? estimate : invert(estimate))),
-  );
-  valued.forEach(({ row, estimate }, index) => {
-    if (estimate.value > 0) ranks.set(row.catalystId, { place: index + 1, tied: !!ties[index] });
-  });
+  const ranked = measure.id === 'ea' ? null : (measure.id satisfies RankedMeasure);
+  for (const { row } of valued) {
+    const ranking = ranked === null ? null : row.ranks[ranked];
+    if (ranking === null) continue;
+    const { rank: place, rankLow: low, rankHigh: high, chanceAmongFirst, tiedWithBest } = ranking;
+    ranks.set(row.catalystId, { place, tied: tiedWithBest, low, high, chanceAmongFirst });
+  }
   const alone = [...ranks.values()].filter(({ tied }) => tied).length < 2;
   if (alone) for (const rank of ranks.values()) rank.tied = false;
   return {
@@ -106,7 +103,7 @@ export function sectionsFor(rows: readonly LeaderboardRow[], sort: SortId): Sect
 function byOrder(rows: readonly LeaderboardRow[], measure: Measure): Section[] {
   const groups = new Map<string, LeaderboardRow[]>();
   for (const row of rows) {
-    const key = `${row.order ?? row.verdict}|${row.kUnit ?? ''}`;
+    const key = kGroupOf(row) ?? '';
     groups.set(key, [...(groups.get(key) ?? []), row]);
   }
   const orderOf = ([first]: LeaderboardRow[]) => first?.order ?? Infinity;

@@ -60,7 +60,7 @@ export function leaderboardColumns(campaign: CampaignSummary, sort: SortId): Lea
       { measure: id },
     );
   return [
-    column('candidate', 'Candidate', 128, (row) => <Candidate row={row} campaign={campaign} />),
+    column('candidate', 'Candidate', 118, (row) => <Candidate row={row} campaign={campaign} />),
     column('verdict', 'Verdict', 126, (row) => <WhyButton row={row} />),
     column('decay', 'Decay', 62, (row) => <Sparkline readings={row.sparkline} />),
     figure('rate', 192),
@@ -76,7 +76,7 @@ export function leaderboardColumns(campaign: CampaignSummary, sort: SortId): Lea
       </span>
     )),
     column('residual', 'Residual s.d.', 116, (row) => <Residual row={row} />),
-    column('decision', 'Decision', 104, ({ decision }) => (
+    column('decision', 'Decision', 94, ({ decision }) => (
       <span className={decision.state === 'open' ? 'text-quiet' : 'font-semibold'}>
         {stateLabels[decision.state]}
       </span>

@@ -1,22 +1,26 @@
 import type { AnalysedWell } from '../analyseWell';
-import { rateLawOf, requestedRateLaw } from '../rateLaws/registry';
-import type { RateLaw } from '../rateLaws/rateLaw';
+import { rateLawOf, requestedLaw } from '../rateLaws/registry';
 import type {
   CatalystAnalysis,
   LawFit,
   LawRequest,
   RateLawName,
+  ReadingDimension,
   ReferenceConditions,
   Verdict,
   WarningCode,
 } from '../types';
+import { activationParameters } from './eyring';
+import type { BlankModel } from '../blanks/blankModel';
 import { blanksReact, type BlankRate } from './blanksReact';
+import { fitOneStep } from './fitOneStep';
 import { describeByInitialRate } from './initialRateBasis';
 import { anyDecay } from './jointDecay';
 import { describeByLaw } from './lawBasis';
 import { poolEvidence, type PooledVerdict } from './poolEvidence';
 import { fitUnder, type BasisResult, type PooledWell } from './pooledWell';
 import { poolLoading } from './poolLoading';
+import { describeBySaturation } from './saturatingBasis';
 import { countTemperatures } from './temperatures';
 import { warnOfTemperatures } from './temperatureWarnings';
 
@@ -31,6 +35,8 @@ const NOTHING: BasisResult = {
   activationEnergy: null,
   initialRateActivationEnergy: null,
   lnA: null,
+  adsorption: null,
+  net: false,
 };
 
 /**
@@ -40,12 +46,14 @@ const NOTHING: BasisResult = {
  * @param wells its samples (or benchmarks), at least one; wells whose results have another
  *   dimension than the first usable one's are left out
  * @param blanks what reacts without the catalyst, anywhere in the screen
+ * @param model of the blanks of the catalyst's dimension, to take their rate off
  */
 export function analyseCatalyst(
   catalyst: string,
   wells: readonly AnalysedWell[],
   reference: ReferenceConditions,
   blanks: readonly BlankRate[] = [],
+  model: BlankModel | null = null,
 ): CatalystAnalysis {
   const usable = wells.filter((well) => well.analysis.verdict !== 'unusable');
   const dimension = (usable[0] ?? wells[0])?.analysis.dimension ?? 'concentration';
@@ -62,32 +70,44 @@ export function analyseCatalyst(
   });
   const warnings: WarningCode[] = [];
   const decided = decide(wells, pooled, decays, warnings);
-  const law = decided.law;
 
-  let basis = NOTHING;
+  let basis: BasisResult = NOTHING;
   if (pooled.length > 0) {
     warnings.push(...loading.warnings);
-    basis =
-      law === null
-        ? describeByInitialRate(pooled, dimension, reference)
-        : describeByLaw(pooled, law, dimension, reference);
+    basis = describeBasis(decided, pooled, dimension, reference, model, loading.loadingGPerL);
+    if (pooled.some(({ series }) => series.level === true)) {
+      // What stays is not known at the reference, so neither are rate and time.
+      basis = { ...basis, rateRef: null, timeToTarget: null, bracket: false };
+      warnings.push('level-by-request');
+    }
     warnings.push(...warnOfTemperatures(pooled, basis.arrhenius, reference));
-    if (blanksReact(blanks, pooled)) warnings.push('blank-reacts');
+    if (blanksReact(blanks, pooled)) {
+      warnings.push(basis.net ? 'blank-subtracted' : 'blank-reacts');
+    }
+    if (basis.net && basis.arrhenius === null && basis.kRef === null && basis.rateRef === null) {
+      warnings.push('not-above-blank');
+    }
   }
+  const { net, ...figures } = basis;
+  const oneStep = net
+    ? null
+    : fitOneStep(pooled, { ...decided, ...basis, kKnown: basis.kUnit !== null });
+  if (oneStep?.disagreesWithTwoStep) warnings.push('one-step-disagrees');
   const rateRefPerMass = perMass(
     basis.rateRef,
     dimension === 'concentration' ? loading.loadingGPerL : null,
   );
-  const fits = pooled.map((well) => fitUnder(well, law)).filter((fit) => fit !== null);
+  const fits = pooled.map((well) => fitUnder(well, decided.law)).filter((fit) => fit !== null);
   return {
     catalyst,
     dimension,
     verdict: decided.verdict,
-    order: law === null ? null : law.order,
-    basis: law === null ? 'initial-rate' : 'law',
-    ...basis,
+    order: decided.order,
+    basis: decided.law === null ? 'initial-rate' : 'law',
+    ...figures,
     rateRefPerMass,
     turnoverFrequency: perSite(rateRefPerMass, pooled),
+    eyring: decided.law === 'first' ? perSiteActivation(basis, loading.loadingGPerL, pooled) : null,
     loadingGPerL: pooled.length > 0 ? loading.loadingGPerL : null,
     conversion: largest(same.map((well) => well.analysis.conversion)),
     relativeResidualSd: relativeResidualSd(fits),
@@ -98,7 +118,39 @@ export function analyseCatalyst(
     seriesIds: wells.map((well) => well.series.id),
     weights: decided.weights,
     warnings: [...new Set(warnings)],
+    oneStep,
   };
+}
+
+/** What the wells come to: the law to rank by, if any. */
+interface Decided {
+  verdict: Verdict;
+  law: RateLawName | null;
+  /** Null for the saturating law. */
+  order: number | null;
+  weights: PooledVerdict['weights'];
+}
+
+const withoutLaw = (verdict: Verdict): Decided => ({
+  verdict,
+  law: null,
+  order: null,
+  weights: {},
+});
+
+function describeBasis(
+  { law, order }: Decided,
+  wells: readonly PooledWell[],
+  dimension: ReadingDimension,
+  reference: ReferenceConditions,
+  model: BlankModel | null,
+  loadingGPerL: number | null,
+): BasisResult {
+  if (law === 'saturating') return describeBySaturation(wells, dimension, reference);
+  const powerLaw = law === null ? null : rateLawOf(law, order);
+  return powerLaw === null
+    ? describeByInitialRate(wells, dimension, reference)
+    : describeByLaw(wells, powerLaw, dimension, reference, model, loadingGPerL);
 }
 
 function decide(
@@ -106,31 +158,29 @@ function decide(
   pooled: readonly PooledWell[],
   decays: boolean,
   warnings: WarningCode[],
-): { verdict: Verdict; law: RateLaw | null; weights: PooledVerdict['weights'] } {
+): Decided {
   const forced = sharedRequest(wells.map((well) => well.series.law));
   if (forced === 'mixed') warnings.push('mixed-forced-laws');
   if (wells.every((well) => well.analysis.verdict === 'unusable')) {
     warnings.push(...wells.flatMap((well) => well.analysis.warnings.filter(saysUnusable)));
-    return { verdict: 'unusable', law: null, weights: {} };
+    return withoutLaw('unusable');
   }
   if (pooled.length === 0) {
     if (decays && (forced === null || forced === 'mixed')) {
       warnings.push('reacts-only-together');
-      return { verdict: 'undetermined', law: null, weights: {} };
+      return withoutLaw('undetermined');
     }
     warnings.push('no-reacting-wells');
-    return { verdict: 'no-reaction', law: null, weights: {} };
+    return withoutLaw('no-reaction');
   }
   if (pooled.length < 2) warnings.push('few-wells');
   const joint = poolEvidence(pooled);
   if (forced === null || forced === 'mixed') {
     warnings.push(...joint.warnings);
-    const law = joint.order === null ? null : rateLawOf(joint.verdict as RateLawName, joint.order);
-    return { verdict: joint.verdict, law, weights: joint.weights };
+    return joint;
   }
-  const order = pooled[0]!.analysis.order;
-  const law = rateLawOf(pooled[0]!.analysis.shownLaw!, order);
-  return { verdict: 'forced', law, weights: joint.weights };
+  const { shownLaw, order } = pooled[0]!.analysis;
+  return { verdict: 'forced', law: shownLaw, order, weights: joint.weights };
 }
 
 const saysUnusable = (code: WarningCode) =>
@@ -141,8 +191,8 @@ function sharedRequest(requests: readonly LawRequest[]): LawRequest | null | 'mi
   // First order and order 1 are one law, however they are asked for.
   const keys = new Set(
     requests.map((request) => {
-      const law = requestedRateLaw(request);
-      return law === null ? 'auto' : `${law.name} ${law.order}`;
+      const asked = requestedLaw(request);
+      return asked === null ? 'auto' : `${asked.name} ${asked.law?.order}`;
     }),
   );
   if (keys.size > 1) return 'mixed';
@@ -154,11 +204,28 @@ function perMass(rate: CatalystAnalysis['rateRef'], loadingGPerL: number | null)
   return loadingGPerL === null ? null : scaled(rate, 1000 / loadingGPerL);
 }
 
+/** ΔH‡ and ΔS‡ of k over the sites at the pooled loading. */
+function perSiteActivation(
+  { arrhenius, kRef }: BasisResult,
+  loadingGPerL: number | null,
+  wells: readonly PooledWell[],
+): CatalystAnalysis['eyring'] {
+  const density = siteDensityOf(wells);
+  if (arrhenius === null || kRef === null || loadingGPerL === null || density === null) return null;
+  return activationParameters(arrhenius, (loadingGPerL * density) / 1000);
+}
+
+function siteDensityOf(wells: readonly PooledWell[]): number | null {
+  return (
+    wells.find(({ series }) => (series.siteDensityMolPerKg ?? 0) > 0)?.series.siteDensityMolPerKg ??
+    null
+  );
+}
+
 /** Per active site, as a rate of reaction: the coefficient of the reactant divides. */
 function perSite(rate: CatalystAnalysis['rateRef'], wells: readonly PooledWell[]) {
-  const series = wells.find((well) => well.series.siteDensityMolPerKg !== null)?.series;
-  if (series === undefined || !(series.siteDensityMolPerKg! > 0)) return null;
-  return scaled(rate, 1 / (series.siteDensityMolPerKg! * series.nu));
+  const density = siteDensityOf(wells);
+  return density === null ? null : scaled(rate, 1 / (density * wells[0]!.series.nu));
 }
 
 function scaled(rate: CatalystAnalysis['rateRef'], factor: number): CatalystAnalysis['rateRef'] {

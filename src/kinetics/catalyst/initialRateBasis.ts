@@ -1,5 +1,5 @@
 import { rateLaws } from '../rateLaws/registry';
-import type { ReadingDimension, ReferenceConditions } from '../types';
+import type { Estimate, ReadingDimension, ReferenceConditions } from '../types';
 import type { BasisResult, PooledWell } from './pooledWell';
 import { activationEnergyOf } from './fitArrhenius';
 import { constantPoint, referenceConcentration } from './lawBasis';
@@ -23,21 +23,26 @@ export function describeByInitialRate(
 ): BasisResult {
   // Signals differ in scale from well to well: only rates relative to C0 compare.
   const relative = wells.some((well) => well.series.kind === 'signal');
-  const line = constantsOverTemperature(pseudoConstants(wells, relative ? 1 : 0), null).line;
+  const net = wells.every(({ analysis }) => analysis.net?.initialRate != null);
+  const own = (well: PooledWell) =>
+    net ? well.analysis.net!.initialRate : well.analysis.initialRate;
+  const line = constantsOverTemperature(pseudoConstants(wells, relative ? 1 : 0, own), null).line;
   const c = referenceConcentration(reference, dimension);
   const x = reference.targetConversion;
 
+  const read = (order: number, rateOf: RateOf) =>
+    reference.temperatureK === null || c === null
+      ? null
+      : constantsOverTemperature(pseudoConstants(wells, order, rateOf), reference.temperatureK).at;
   const byOrder = rateLaws.map((law) => ({
     law,
-    at:
-      reference.temperatureK === null || c === null
-        ? null
-        : constantsOverTemperature(pseudoConstants(wells, law.order), reference.temperatureK).at,
+    at: read(law.order, own),
+    beside: net ? read(law.order, withBlank) : read(law.order, own),
   }));
   const rates = byOrder.map(({ law, at }) => scaledConstant(at, law.order * Math.log(c ?? NaN)));
-  const times = byOrder.map(({ law, at }) =>
+  const times = byOrder.map(({ law, beside }) =>
     timeFromConstant(
-      at,
+      beside,
       x === null ? NaN : Math.log(law.reach(x)) - (law.order - 1) * Math.log(c ?? NaN),
     ),
   );
@@ -50,18 +55,33 @@ export function describeByInitialRate(
     kRefTemperatureK: null,
     rateRef,
     timeToTarget,
+    net,
     bracket: rateRef !== null || timeToTarget !== null,
     arrhenius: line,
     activationEnergy: null,
     initialRateActivationEnergy: line === null ? null : activationEnergyOf(line),
     lnA: null,
+    adsorption: null,
   };
 }
 
+type RateOf = (well: PooledWell) => Estimate | null;
+
+/** The well's own rate with the blank's beside it, which does not grow with the loading. */
+function withBlank({ analysis: { initialRate, net }, factor }: PooledWell): Estimate | null {
+  const own = net?.initialRate ?? null;
+  if (initialRate === null || own === null) return initialRate;
+  return { ...own, value: own.value + (initialRate.value - own.value) / factor };
+}
+
 /** r0/Cⁿ of each well at its first reading: its k if the order were n. */
-function pseudoConstants(wells: readonly PooledWell[], order: number): ConstantPoint[] {
+function pseudoConstants(
+  wells: readonly PooledWell[],
+  order: number,
+  rateOf: RateOf,
+): ConstantPoint[] {
   return wells.flatMap((well) => {
-    const rate = well.analysis.initialRate;
+    const rate = rateOf(well);
     const c = well.firstConcentration;
     if (rate === null || (order !== 0 && !(c !== null && c > 0))) return [];
     const scale = order === 0 ? 1 : (c ?? 1) ** order;

@@ -1,3 +1,6 @@
+import type { BlankModel } from '../blanks/blankModel';
+import { netConstant } from '../blanks/netOfBlank';
+import { timeBesideBlank } from '../blanks/timeBesideBlank';
 import type { RateLaw } from '../rateLaws/rateLaw';
 import type { ReadingDimension, ReferenceConditions } from '../types';
 import { fitUnder, type BasisResult, type PooledWell } from './pooledWell';
@@ -37,22 +40,30 @@ export function constantPoint(
 
 /**
  * Results of a catalyst whose law is known: all wells under that law. Where k itself cannot be
- * given (its unit needs a concentration), kRel still gives the activation energy.
+ * given (its unit needs a concentration), kRel still gives the activation energy. Where blanks
+ * cover every well, k and rates are the catalyst's own, and the time is that of both together.
+ *
+ * @param blank what goes on without the catalyst
+ * @param loadingGPerL the loading that the wells are brought to
  */
 export function describeByLaw(
   wells: readonly PooledWell[],
   law: RateLaw,
   dimension: ReadingDimension,
   reference: ReferenceConditions,
+  blank: BlankModel | null,
+  loadingGPerL: number | null,
 ): BasisResult {
-  const own = wells.flatMap((well) => {
-    const fit = fitUnder(well, law);
-    return fit === null ? [] : [{ well, fit }];
+  const nets = blank === null ? null : wells.map((well) => netConstant(well, law.order, blank));
+  const netKnown = nets !== null && nets.every((net) => net !== null);
+  const own = wells.flatMap((well, i) => {
+    const fit = fitUnder(well, law.name);
+    return fit === null ? [] : [{ well, fit, net: netKnown ? nets[i]! : null }];
   });
   const kKnown = own.some(({ fit }) => fit.k !== null);
-  const points = own.flatMap(({ well, fit }) => {
+  const points = own.flatMap(({ well, fit, net }) => {
     const point = kKnown
-      ? constantPoint(well, fit.k, fit.kSe, fit.dof)
+      ? constantPoint(well, net?.k ?? fit.k, net?.se ?? fit.kSe, fit.dof)
       : constantPoint(well, fit.kRel, fit.kRelSe, fit.dof);
     return point === null ? [] : [point];
   });
@@ -61,6 +72,10 @@ export function describeByLaw(
   const atReference = reference.temperatureK === null ? null : k;
   const c = referenceConcentration(reference, dimension);
   const x = reference.targetConversion;
+  const beside =
+    netKnown && reference.temperatureK !== null
+      ? blank!.at(law.order, reference.temperatureK, loadingGPerL)
+      : null;
   // t = u(X) / (k C^(n−1)); first order needs no concentration.
   const lnTime =
     x === null
@@ -71,11 +86,16 @@ export function describeByLaw(
     kRef: scaledConstant(k, 0),
     kRefTemperatureK: k === null ? null : k.temperatureK,
     rateRef: scaledConstant(atReference, c === null ? null : law.order * Math.log(c)),
-    timeToTarget: timeFromConstant(atReference, lnTime),
+    timeToTarget:
+      beside === null || beside.k === 0 || x === null
+        ? timeFromConstant(atReference, lnTime)
+        : timeBesideBlank(atReference, law, beside, c, x),
+    net: netKnown,
     bracket: false,
     arrhenius: line,
     activationEnergy: line === null ? null : activationEnergyOf(line),
     initialRateActivationEnergy: null,
     lnA: line === null || !kKnown ? null : lnPreExponentialOf(line),
+    adsorption: null,
   };
 }

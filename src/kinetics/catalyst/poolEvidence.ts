@@ -2,13 +2,20 @@ import type { AnalysedWell } from '../analyseWell';
 import { chanceGain, oneSidedGain } from '../statistics/chanceGain';
 import { akaikeWeights } from '../statistics/goodnessOfFit';
 import type { RateLawName, WarningCode } from '../types';
-import { selectRateLaw, type Evidence, type FreeOrder } from '../verdict/selectRateLaw';
+import {
+  selectRateLaw,
+  type Evidence,
+  type FreeOrder,
+  type Selection,
+} from '../verdict/selectRateLaw';
 import { aboutMean, betweenVariance, weightedMean } from './betweenVariance';
 import { setTemperatures } from './temperatures';
 
 /** What a catalyst's wells say together. */
 export interface PooledVerdict {
-  verdict: 'zero' | 'first' | 'second' | 'other' | 'undetermined';
+  verdict: Selection['verdict'];
+  /** The law asserted; null with `other` and `undetermined`. */
+  law: RateLawName | null;
   order: number | null;
   weights: Partial<Record<RateLawName, number>>;
   warnings: WarningCode[];
@@ -48,7 +55,7 @@ function sumEvidence(wells: readonly JudgedWell[]): Evidence {
   }));
   const best = laws.reduce((lowest, law) => (law.aicc < lowest.aicc ? law : lowest));
   const rivals: Evidence['rivals'] = {};
-  for (const name of ['order', 'plateau', 'deactivating'] as const) {
+  for (const name of ['order', 'plateau', 'deactivating', 'saturating'] as const) {
     const own = wells.filter((well) => well.evidence.rivals[name] !== undefined);
     if (own.length === 0) continue;
     // Wells too small for the rival stand with the best law, so that the sums stay comparable.
@@ -62,7 +69,25 @@ function sumEvidence(wells: readonly JudgedWell[]): Evidence {
     );
     rivals[name] = best.aicc - gain + charge;
   }
-  return { laws, rivals, rivalCharge: 0 };
+  return {
+    laws,
+    rivals,
+    rivalCharge: 0,
+    coverage: poolCoverage(wells),
+    withLevel: wells.every(({ evidence }) => evidence.withLevel === true),
+  };
+}
+
+/** Inside the law when the intervals of two wells are, or that of the only one. */
+function poolCoverage(wells: readonly JudgedWell[]): Evidence['coverage'] {
+  const known = wells.flatMap(({ evidence }) => evidence.coverage ?? []);
+  const bounded = known.filter((coverage) => coverage.bounded);
+  if (known.length === 0) return null;
+  const shown = bounded.length > 0 ? bounded : known;
+  return {
+    value: shown.reduce((sum, { value }) => sum + value, 0) / shown.length,
+    bounded: bounded.length >= Math.min(2, known.length),
+  };
 }
 
 /** Free order over the wells, with the scatter between wells as a random effect. */
@@ -95,7 +120,13 @@ function poolOrder(wells: readonly JudgedWell[]): FreeOrder | null {
 export function poolEvidence(wells: readonly AnalysedWell[]): PooledVerdict {
   const judged = wells.filter((well): well is JudgedWell => well.evidence !== null);
   if (judged.length === 0) {
-    return { verdict: 'undetermined', order: null, weights: {}, warnings: ['too-few-for-order'] };
+    return {
+      verdict: 'undetermined',
+      law: null,
+      order: null,
+      weights: {},
+      warnings: ['too-few-for-order'],
+    };
   }
   const evidence = sumEvidence(judged);
   const shares = akaikeWeights(evidence.laws.map((law) => law.aicc));
@@ -104,20 +135,18 @@ export function poolEvidence(wells: readonly AnalysedWell[]): PooledVerdict {
   const refuse = (
     verdict: 'other' | 'undetermined',
     ...warnings: WarningCode[]
-  ): PooledVerdict => ({ verdict, order: null, weights, warnings });
+  ): PooledVerdict => ({ verdict, law: null, order: null, weights, warnings });
 
-  if (ordersByTemperature(judged).size > 1)
-    return refuse('other', 'order-changes-with-temperature');
   const selection = selectRateLaw(evidence, poolOrder(judged));
-  if (selection.order === null) {
-    return refuse(selection.verdict as 'other' | 'undetermined', ...selection.warnings);
+  const { verdict, law, order } = selection;
+  // A surface that is full when cold and bare when hot shows both orders under one law.
+  if (law !== 'saturating' && ordersByTemperature(judged).size > 1)
+    return refuse('other', 'order-changes-with-temperature');
+  if (law === null) {
+    return refuse(verdict as 'other' | 'undetermined', ...selection.warnings);
   }
-  const agreeing = judged.filter((well) => {
-    const laws = well.evidence.laws;
-    const own = laws.find((law) => law.name === selection.best)!;
-    return laws.every((law) => own.aicc <= law.aicc);
-  }).length;
-  if (agreeing < Math.min(2, judged.length)) return refuse('undetermined', 'laws-equally-good');
+  if (order !== null && countAgreeing(judged, law) < Math.min(2, judged.length))
+    return refuse('undetermined', 'laws-equally-good');
   const missing = judged.filter((well) => well.analysis.lackOfFit?.significant === true).length;
   if (
     missing >= Math.min(WELLS_MISSING, judged.length) &&
@@ -125,7 +154,15 @@ export function poolEvidence(wells: readonly AnalysedWell[]): PooledVerdict {
   ) {
     return refuse('other', 'no-simple-order', 'lack-of-fit');
   }
-  return { verdict: selection.verdict, order: selection.order, weights, warnings: [] };
+  return { verdict, law, order, weights, warnings: [] };
+}
+
+/** Wells in which no other order has more support. */
+function countAgreeing(wells: readonly JudgedWell[], name: RateLawName): number {
+  return wells.filter(({ evidence: { laws } }) => {
+    const own = laws.find((law) => law.name === name)!;
+    return laws.every((law) => own.aicc <= law.aicc);
+  }).length;
 }
 
 /** The orders that the wells of single temperatures assert. */

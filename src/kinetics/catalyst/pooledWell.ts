@@ -1,6 +1,5 @@
 import type { AnalysedWell } from '../analyseWell';
-import type { RateLaw } from '../rateLaws/rateLaw';
-import type { CatalystAnalysis, LawFit } from '../types';
+import type { CatalystAnalysis, LawFit, RateLawName } from '../types';
 
 /** The result keys that a basis fills in. */
 export type BasisResult = Pick<
@@ -15,7 +14,11 @@ export type BasisResult = Pick<
   | 'activationEnergy'
   | 'initialRateActivationEnergy'
   | 'lnA'
->;
+  | 'adsorption'
+> & {
+  /** True when the blanks' rate was taken off. */
+  net: boolean;
+};
 
 /** A reacting well with the factor that brings its k to the pooled loading. */
 export interface PooledWell extends AnalysedWell {
@@ -23,7 +26,7 @@ export interface PooledWell extends AnalysedWell {
 }
 
 /** The fit of a well under a law, or under its shown law. */
-export function fitUnder(well: AnalysedWell, law: RateLaw | null): LawFit | null {
-  const name = law?.name ?? well.analysis.shownLaw;
+export function fitUnder(well: AnalysedWell, law: RateLawName | null): LawFit | null {
+  const name = law ?? well.analysis.shownLaw;
   return name === null ? null : (well.analysis.fits[name] ?? null);
 }

@@ -1,6 +1,6 @@
 import type { ArrheniusLine, ReferenceConditions, WarningCode } from '../types';
 import type { PooledWell } from './pooledWell';
-import { testCurvature } from './curvature';
+import { bendWarnings } from './bendWarnings';
 import { referenceConcentration } from './lawBasis';
 import { countTemperatures, SAME_TEMPERATURE_K } from './temperatures';
 
@@ -23,7 +23,7 @@ export function warnOfTemperatures(
   if (line !== null) {
     if (line.activationEnergy < 0) warnings.push('negative-activation-energy');
     else if (line.activationEnergy < LOW_ACTIVATION_ENERGY) warnings.push('low-activation-energy');
-    if (testCurvature(line.points)?.curved) warnings.push('arrhenius-curved');
+    warnings.push(...bendWarnings(wells, line.points));
   }
   const t = reference.temperatureK;
   if (

@@ -23,7 +23,7 @@ const rootOrNull = (variance: number | null) =>
   variance !== null && variance >= 0 ? finiteOrNull(Math.sqrt(variance)) : null;
 
 /** C per unit of amplitude; null where readings do not carry the concentration. */
-function concentrationPerAmplitude(series: DecaySeries): number | null {
+export function concentrationPerAmplitude(series: DecaySeries): number | null {
   if (series.kind === 'product') return 1 / series.productPerReactant;
   if (series.kind === 'conversion') return series.initialConcentration;
   return 1;
@@ -40,14 +40,8 @@ export function describeFit(
 ): DescribedFit {
   const dimension = resultDimension(series);
   const n = readings.values.length;
-  const common = {
-    rss: Math.min(fit.rss, Number.MAX_VALUE),
-    aicc: aicc(n, fit.rss, fit.parameters),
-    weight: null,
-    residualSd: fit.dof > 0 ? finiteOrNull(Math.sqrt(fit.rss / fit.dof)) : null,
-    dof: fit.dof,
-  };
-  if (fit.growth !== null) return describeGrowth(fit.growth, fit, series, dimension, common);
+  const criterion = aicc(n, fit.rss, fit.parameters);
+  if (fit.growth !== null) return describeGrowth(fit.growth, fit, series, dimension, criterion);
 
   const { law, problem } = fit;
   const amplitude = fit.amplitude!;
@@ -58,7 +52,7 @@ export function describeFit(
   const order = law.order;
 
   const kKnown = order === 1 || (dimension !== 'ratio' && c !== null && c > 0);
-  const power = order === 1 ? 1 : (c ?? 1) ** (1 - order);
+  const power = concentrationPower(c ?? 1, 1 - order);
   const kByAmplitude = order === 1 ? 0 : (kRel * (1 - order) * power) / amplitude;
   const kVariance =
     covariance === null
@@ -79,8 +73,19 @@ export function describeFit(
     fit: {
       k: kKnown ? finiteOrNull(kRel * power) : null,
       kSe: kKnown ? rootOrNull(kVariance) : null,
-      ...start,
-      ...common,
+      kRel: start.kRel,
+      kRelSe: start.kRelSe,
+      c0: start.c0,
+      c0Se: start.c0Se,
+      originS: start.originS,
+      covariance: start.covariance,
+      rss: Math.min(fit.rss, Number.MAX_VALUE),
+      aicc: criterion,
+      weight: null,
+      residualSd: residualSdOf(fit),
+      dof: fit.dof,
+      saturation: null,
+      level: null,
     },
     initialRate: {
       value: -scale * amplitude * kRel * slope,
@@ -98,13 +103,23 @@ export function describeFit(
   };
 }
 
+/** Cⁿ, quickly for the orders that every well is fitted with. */
+function concentrationPower(c: number, n: number): number {
+  if (n === 0) return 1;
+  if (n === 1) return c;
+  return n === -1 ? 1 / c : c ** n;
+}
+
+const residualSdOf = ({ rss, dof }: RelativeFit) =>
+  dof > 0 ? finiteOrNull(Math.sqrt(rss / dof)) : null;
+
 /** Growth that shows no curvature: a rate, but neither C0 nor kRel. */
 function describeGrowth(
   growth: { slope: number; variance: number | null },
   fit: RelativeFit,
   series: DecaySeries,
   dimension: ReadingDimension,
-  common: Pick<LawFit, 'rss' | 'aicc' | 'weight' | 'residualSd' | 'dof'>,
+  criterion: number | null,
 ): DescribedFit {
   const rate = growth.slope / series.productPerReactant;
   const slopeSe = rootOrNull(growth.variance);
@@ -120,7 +135,13 @@ function describeGrowth(
       c0Se: null,
       originS: 0,
       covariance: null,
-      ...common,
+      rss: Math.min(fit.rss, Number.MAX_VALUE),
+      aicc: criterion,
+      weight: null,
+      residualSd: residualSdOf(fit),
+      dof: fit.dof,
+      saturation: null,
+      level: null,
     },
     initialRate: { value: rate, se },
     firstConcentration: null,
@@ -136,7 +157,20 @@ function atTimeZero(
   const { law, problem, covariance } = fit;
   const amplitude = fit.amplitude!;
   const kRel = fit.kRel!;
+  const known = perAmplitude !== null;
+  const scale = perAmplitude ?? 1;
+  const free = known && problem.mode !== 'fraction';
   let origin = problem.originS;
+  if (origin === 0) {
+    return {
+      kRel: finiteOrNull(kRel),
+      kRelSe: covariance === null ? null : rootOrNull(covariance.kk),
+      c0: known ? finiteOrNull(scale * amplitude) : null,
+      c0Se: covariance !== null && free ? rootOrNull(scale * scale * covariance.aa) : null,
+      originS: 0,
+      covariance: covariance !== null && free ? finiteOrNull(scale * covariance.ak) : null,
+    };
+  }
   let [g, slope] = [1, 0];
   const back = -kRel * origin;
   if (origin !== 0 && back > law.lowestU * 0.999) {
@@ -148,12 +182,9 @@ function atTimeZero(
   }
   const moved = origin === problem.originS ? 0 : problem.originS;
   const n = law.order;
-  const scale = perAmplitude ?? 1;
   const cByA = scale * g;
   const cByK = -scale * amplitude * moved * slope;
   const kByK = g ** (n - 1) - kRel * (n - 1) * g ** (n - 2) * slope * moved;
-  const known = perAmplitude !== null;
-  const free = known && problem.mode !== 'fraction';
   return {
     kRel: finiteOrNull(kRel * g ** (n - 1)),
     kRelSe: covariance === null ? null : rootOrNull(kByK ** 2 * covariance.kk),

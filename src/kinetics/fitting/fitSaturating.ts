@@ -15,6 +15,8 @@ export interface SaturatingFit {
 }
 
 const MOST_STEPS = 60;
+/** Beyond these the law is its limit. */
+const LOWEST_COVERAGE = 1e-9;
 const HIGHEST_COVERAGE = 1 - 1e-9;
 const SMALL_STEP = 1e-6;
 const MOST_DAMPING = 1e12;
@@ -56,37 +58,42 @@ function profileSums(
   const sign = mode === 'decay' ? 1 : -1;
   const offset = mode === 'decay' ? 0 : 1;
   const free = 1 - coverage;
-  let [x, w, d, before] = [0, 1, 1, 0];
+  let x = 0;
+  let w = 1;
+  /** 1/(1 − σ + σ w). */
+  let id = 1;
+  let before = 0;
   let [p, q, pr, ps, prr, prs, pss, qr, qs, qrr, qrs, qss] = [0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0];
   for (let i = 0; i < t.length; i += 1) {
-    const u = kRel * t[i]!;
+    const ti = t[i]!;
+    const u = kRel * ti;
     if (u !== before) {
-      const h = (u - before) / d;
-      const c = (coverage * w) / d;
-      x += h * (-1 + h * (-0.5 * c + (h * c * (free / d - 2 * c)) / 6));
+      const h = (u - before) * id;
+      const c = coverage * w * id;
+      x += h * (-1 + h * (-0.5 * c + (h * c * (free * id - 2 * c)) / 6));
       before = u;
       for (let j = 0; j < 50; j += 1) {
         w = Math.exp(x);
-        d = free + coverage * w;
-        const newton = (free * x + coverage * w - coverage + u) / d;
-        const step = -newton / (1 - (0.5 * newton * coverage * w) / d);
+        id = 1 / (free + coverage * w);
+        const newton = (free * x + coverage * (w - 1) + u) * id;
+        const step = -newton * (1 + 0.5 * newton * coverage * w * id);
         x += step;
         if (step < SHORT && step > -SHORT) {
           w *= 1 + step * (1 + step * (0.5 + step * (1 / 6 + step / 24)));
-          d = free + coverage * w;
+          id *= 2 - id * (free + coverage * w);
           break;
         }
       }
     }
-    const v = w / d;
+    const v = w * id;
     const l = 1 - w + x;
-    const byW = free / (d * d);
-    const wr = -t[i]! * v;
+    const byW = free * id * id;
+    const wr = -ti * v;
     const ws = v * l;
-    const mixed = byW * l + (1 - w) / d;
-    const wrr = -t[i]! * byW * wr;
+    const mixed = byW * l + (1 - w) * id;
+    const wrr = -ti * byW * wr;
     const wrs = mixed * wr;
-    const wss = mixed * ws + (v * l * (1 - w)) / d;
+    const wss = mixed * ws + v * l * (1 - w) * id;
     if (visit !== null) visit(i, w, wr, ws);
     const f = offset + sign * w;
     const sy = sign * y[i]!;
@@ -234,11 +241,19 @@ export function fitSaturating(
   let yy = 0;
   for (let i = 0; i < problem.y.length; i += 1) yy += problem.y[i]! * problem.y[i]!;
   const rate = first.kRel > 1e-3 ? first.kRel : 1e-3;
-  let at = descend(problem, yy, 0.8 * rate, 0.4);
-  const least = Math.min(first.rss, zero.rss);
-  const unsettled = at.rss > least + 1e-13 * yy;
   // Growth leaves amplitude and kRel a long valley, where one start is not enough.
   const growing = problem.mode === 'growth';
+  if (!growing && first.rss < zero.rss && first.kRel > 1e-3) {
+    const bare = placeAt(problem, yy, first.kRel, 0);
+    if (bare.gs > 0) return finish(problem, bare);
+  }
+  // The better a limit fits, the nearer to it the search begins.
+  const [a, b] = [Math.sqrt(first.rss), Math.sqrt(zero.rss)];
+  const start = growing || !(a + b > 0) ? 0.4 : Math.min(Math.max(a / (a + b), 0.05), 0.9);
+  const between = !growing && zero.kRel > 0 ? rate * (zero.kRel / rate) ** start : 0.8 * rate;
+  let at = descend(problem, yy, between, start);
+  const least = Math.min(first.rss, zero.rss);
+  const unsettled = at.rss > least + 1e-13 * yy;
   if (growing || (unsettled && zero.rss < first.rss)) {
     // Growth that has not run out yet has no kRel of zero order.
     const again = descend(problem, yy, zero.kRel > 0 ? zero.kRel : 1, 0.97);
@@ -251,35 +266,63 @@ export function fitSaturating(
   return finish(problem, at);
 }
 
-function finish(problem: FitProblem, { kRel, coverage }: Place): SaturatingFit {
-  const { y, mode } = problem;
-  const n = y.length;
-  const [f, byRate, byCoverage] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
-  const sign = mode === 'decay' ? 1 : -1;
+/** The curve at an optimum with its derivatives by kRel and coverage, on the scaled readings. */
+function curveAt(problem: FitProblem, kRel: number, coverage: number) {
+  const n = problem.y.length;
+  const f = new Float64Array(n);
+  const byRate = new Float64Array(n);
+  const byCoverage = new Float64Array(n);
+  const growing = problem.mode !== 'decay';
+  const sign = growing ? -1 : 1;
   profileSums(problem, kRel, coverage, trial, (i, w, wr, ws) => {
-    f[i] = mode === 'decay' ? w : 1 - w;
+    f[i] = growing ? 1 - w : w;
     byRate[i] = sign * wr;
     byCoverage[i] = sign * ws;
   });
-  const amplitude = mode === 'fraction' ? 1 : trial.p / trial.q;
-  let [rss, rr, rs, ss, fr, fs] = [0, 0, 0, 0, 0, 0];
-  for (let i = 0; i < n; i += 1) {
+  const amplitude = problem.mode === 'fraction' ? 1 : trial.p / trial.q;
+  return { f, byRate, byCoverage, amplitude };
+}
+
+/** Readings less the curve, in the reading's base unit, in time order. */
+export function saturatingResiduals(problem: FitProblem, fit: SaturatingFit): number[] {
+  const { f } = curveAt(problem, fit.kRel, fit.coverage);
+  return Array.from(problem.y, (y, i) => (y - fit.amplitude * f[i]!) * problem.valueScale);
+}
+
+/** Diagonal of the hat matrix; null at a limit of the law. */
+export function saturatingLeverages(problem: FitProblem, fit: SaturatingFit): number[] | null {
+  const { inverse } = fit;
+  if (inverse === null) return null;
+  const { f, byRate, byCoverage } = curveAt(problem, fit.kRel, fit.coverage);
+  const fixed = problem.mode === 'fraction';
+  return Array.from(f, (value, i) => {
+    const row = [fixed ? 0 : value, fit.amplitude * byRate[i]!, fit.amplitude * byCoverage[i]!];
+    return row.reduce(
+      (sum, a, r) => sum + a * row.reduce((s, b, c) => s + b * inverse[3 * r + c]!, 0),
+      0,
+    );
+  });
+}
+
+function finish(problem: FitProblem, { kRel, coverage }: Place): SaturatingFit {
+  const { y, mode } = problem;
+  const { f, byRate, byCoverage, amplitude } = curveAt(problem, kRel, coverage);
+  let [rss, ff, rr, rs, ss, fr, fs] = [0, 0, 0, 0, 0, 0, 0];
+  for (let i = 0; i < y.length; i += 1) {
     const [r, s] = [amplitude * byRate[i]!, amplitude * byCoverage[i]!];
     rss += (y[i]! - amplitude * f[i]!) ** 2;
+    ff += f[i]! * f[i]!;
     rr += r * r;
     rs += r * s;
     ss += s * s;
     fr += f[i]! * r;
     fs += f[i]! * s;
   }
-  const limit = coverage <= 0 ? 'first' : coverage >= HIGHEST_COVERAGE ? 'zero' : null;
+  const limit = coverage < LOWEST_COVERAGE ? 'first' : coverage >= HIGHEST_COVERAGE ? 'zero' : null;
+  const fixed = mode === 'fraction';
   const inverse =
-    limit !== null
-      ? null
-      : mode === 'fraction'
-        ? invert(1, 0, 0, rr, rs, ss)
-        : invert(trial.q, fr, fs, rr, rs, ss);
-  if (inverse !== null && mode === 'fraction') inverse[0] = 0;
+    limit !== null ? null : fixed ? invert(1, 0, 0, rr, rs, ss) : invert(ff, fr, fs, rr, rs, ss);
+  if (inverse !== null && fixed) inverse[0] = 0;
   return { amplitude, kRel, coverage, rss, limit, inverse };
 }
 

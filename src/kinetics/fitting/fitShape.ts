@@ -34,7 +34,7 @@ let f = new Float64Array(256);
 let byP = new Float64Array(256);
 let byQ = new Float64Array(256);
 
-/** Sums of one trial; a second set keeps the best so far. */
+/** Sums of one trial. */
 interface Trial {
   p: number;
   q: number;
@@ -46,6 +46,21 @@ interface Trial {
   hpq: number;
   hqq: number;
 }
+
+const emptyTrial = (): Trial => ({
+  p: 0.5,
+  q: 0.5,
+  amplitude: 0.5,
+  rss: 0.5,
+  gp: 0.5,
+  gq: 0.5,
+  hpp: 0.5,
+  hpq: 0.5,
+  hqq: 0.5,
+});
+
+/** The best trial and the one under way change places: a search leaves nothing to clean up. */
+const trials: [Trial, Trial] = [emptyTrial(), emptyTrial()];
 
 /**
  * Least squares with the amplitude profiled out (Golub & Pereyra 1973, with the Jacobian of Kaufman
@@ -64,7 +79,8 @@ export function fitShape(
   smallestGain: number,
 ): ShapeFit {
   makeRoom(t.length);
-  let best = tryAt(fill, t, y, start.p, start.q, fixed);
+  let [best, trial] = trials;
+  tryAt(best, fill, t, y, start.p, start.q, fixed);
   let damping = 1e-3;
   for (let i = 0; i < MOST_STEPS && damping < MOST_DAMPING; i += 1) {
     const step = dampedStep(best, range, damping);
@@ -73,9 +89,9 @@ export function fitShape(
     // What the linearised curve promises; near the optimum it is what is still to be had.
     const promised = (p - best.p) * best.gp + (q - best.q) * best.gq;
     if (!(promised > 0)) break;
-    const trial = tryAt(fill, t, y, p, q, fixed);
+    tryAt(trial, fill, t, y, p, q, fixed);
     const gained = trial.rss < best.rss;
-    if (gained) best = trial;
+    if (gained) [best, trial] = [trial, best];
     if (promised < smallestGain * best.rss) break;
     damping = gained ? Math.max(damping / 8, 1e-12) : damping * 6;
   }
@@ -122,13 +138,14 @@ const within = (value: number, [low, high]: readonly [number, number]) =>
   Math.min(Math.max(value, low), high);
 
 function tryAt(
+  into: Trial,
   fill: TwoParameterFill,
   t: Float64Array,
   y: Float64Array,
   p: number,
   q: number,
   fixed: boolean,
-): Trial {
+): void {
   fill(p, q, t, f, byP, byQ);
   const n = t.length;
   let [fy, ff, fp, fq, pp, pq, qq] = [0, 0, 0, 0, 0, 0, 0];
@@ -158,15 +175,13 @@ function tryAt(
     qq -= (fq * fq) / ff;
   }
   const square = amplitude * amplitude;
-  return {
-    p,
-    q,
-    amplitude,
-    rss: Number.isFinite(rss) ? rss : Infinity,
-    gp: amplitude * gp,
-    gq: amplitude * gq,
-    hpp: square * Math.max(pp, 0),
-    hpq: square * pq,
-    hqq: square * Math.max(qq, 0),
-  };
+  into.p = p;
+  into.q = q;
+  into.amplitude = amplitude;
+  into.rss = Number.isFinite(rss) ? rss : Infinity;
+  into.gp = amplitude * gp;
+  into.gq = amplitude * gq;
+  into.hpp = square * Math.max(pp, 0);
+  into.hpq = square * pq;
+  into.hqq = square * Math.max(qq, 0);
 }

@@ -19,7 +19,8 @@ export interface FitProblem {
   valueScale: number;
   /** Smallest scaled time above 0. */
   firstStep: number;
-  /** Σ(y − ȳ)² of the scaled readings. */
+  /** Σy² and Σ(y − ȳ)² of the scaled readings. */
+  squares: number;
   spread: number;
 }
 
@@ -30,6 +31,23 @@ export const MODE: Record<ReadingKind, ReadingMode> = {
   product: 'growth',
   conversion: 'fraction',
 };
+
+/** Numbers of one allocation: a buffer for each well would cost more than its fit. */
+const SLAB = 8192;
+let slab = new Float64Array(SLAB);
+let taken = 0;
+
+/** Room for `n` numbers; what it holds is undefined. */
+function roomFor(n: number): Float64Array {
+  if (n > SLAB / 8) return new Float64Array(n);
+  if (taken + n > SLAB) {
+    slab = new Float64Array(SLAB);
+    taken = 0;
+  }
+  const room = new Float64Array(slab.buffer, taken * 8, n);
+  taken += n;
+  return room;
+}
 
 /**
  * Scales a well's readings for fitting.
@@ -52,8 +70,8 @@ export function scaleReadings(readings: Readings, kind: ReadingKind): FitProblem
   }
   // A fraction has an absolute scale: 1 is complete conversion.
   const valueScale = mode === 'fraction' ? 1 : largest || 1;
-  const t = new Float64Array(n);
-  const y = new Float64Array(n);
+  const t = roomFor(n);
+  const y = roomFor(n);
   let firstStep = 0;
   for (let i = 0; i < n; i += 1) {
     const since = Math.max(times[i]! - originS, 0) / timeScale;
@@ -63,6 +81,11 @@ export function scaleReadings(readings: Readings, kind: ReadingKind): FitProblem
     if (firstStep === 0 && since > 0) firstStep = since;
   }
   let spread = 0;
-  for (let i = 0; i < n; i += 1) spread += (y[i]! - sum / n) ** 2;
-  return { mode, t, y, originS, timeScale, valueScale, firstStep: firstStep || 1, spread };
+  let squares = 0;
+  for (let i = 0; i < n; i += 1) {
+    const distance = y[i]! - sum / n;
+    spread += distance * distance;
+    squares += y[i]! * y[i]!;
+  }
+  return { mode, t, y, originS, timeScale, valueScale, firstStep: firstStep || 1, squares, spread };
 }

@@ -3,6 +3,8 @@ import { MODE } from './problem';
 
 /** s; times closer than this are one time: the squares of shorter spans are 0 in a double. */
 const SAME_TIME_S = 1e-100;
+/** s; the squares of later times are infinite in a double: no clock shows them. */
+const LONGEST_S = 1e100;
 
 /** The usable readings of a well, sorted by time. */
 export interface Readings {
@@ -36,7 +38,7 @@ export function collectReadings(series: DecaySeries): Readings {
   timesS.forEach((time, i) => {
     if (time < latest) unsorted = true;
     latest = Math.max(latest, time);
-    if (Number.isFinite(time) && Number.isFinite(values[i] ?? NaN)) usable.push(i);
+    if (Math.abs(time) <= LONGEST_S && Number.isFinite(values[i] ?? NaN)) usable.push(i);
   });
   const indices = usable.sort((a, b) => timesS[a]! - timesS[b]! || a - b);
   const times = indices.map((i) => timesS[i]!);

@@ -40,7 +40,10 @@ export function searchExhaustion(problem: FitProblem): ZeroOrderRate {
 }
 
 function bestOf(candidates: readonly Candidate[]): Candidate {
-  return candidates.reduce((best, one) => (one.explained > best.explained ? one : best));
+  // Squares of the shortest spans vanish, and what is divided by them says nothing.
+  const told = candidates.filter(({ explained, kRel }) => Number.isFinite(explained + kRel));
+  const nothing = { explained: -Infinity, kRel: 0, amplitude: 1 };
+  return told.reduce((best, one) => (one.explained > best.explained ? one : best), nothing);
 }
 
 function residualSquares(

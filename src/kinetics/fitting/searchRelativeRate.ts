@@ -1,7 +1,7 @@
 import type { RateLaw } from '../rateLaws/rateLaw';
 import type { FitProblem } from './problem';
 import { fitAmplitude, type CurveSums } from './curveSums';
-import { integralRate, profiledNewton } from './profiledNewton';
+import { integralRate, newtonSums, profiledNewton } from './profiledNewton';
 import { lowestInBracket, rootInBracket } from './rootInBracket';
 
 /** The best kRel of a law for scaled readings, its amplitude profiled out. */
@@ -57,11 +57,28 @@ function newtonRate(problem: FitProblem, law: RateLaw): RelativeRate | null {
   const sumsAt = mode === 'decay' ? law.decaySums : law.growthSums;
   const kRel = profiledNewton(sumsAt, t, y, start, fixed);
   if (!(kRel > 1e-3 && kRel < MOST_STEPS / problem.firstStep)) return null;
-  const sums = fitAmplitude(problem, law, kRel);
+  const sums =
+    (mode === 'decay' ? decaySumsAt(problem, law) : null) ?? fitAmplitude(problem, law, kRel);
   const { amplitude, rss } = sums;
   return rss < CLEARLY_FALLING * problem.spread
     ? { kRel, amplitude, rss, atBound: false, sums }
     : null;
+}
+
+/** Residuals smaller than this beside the readings lose digits when they come from sums. */
+const LEAST_SHARE = 1e-6;
+
+/**
+ * The curve's sums from those of the search, without another pass: for −dg/du = gⁿ the second
+ * derivative of Σf² is 2(1 + n) Σf'². Null where the residuals are too small for that.
+ */
+function decaySumsAt({ squares }: FitProblem, { order }: RateLaw): CurveSums | null {
+  const [fy, ff, ff1, ff2] = [newtonSums[0]!, newtonSums[3]!, newtonSums[4]!, newtonSums[5]!];
+  const amplitude = fy / ff;
+  const rss = squares - amplitude * fy;
+  if (!(rss > LEAST_SHARE * squares)) return null;
+  const ak = 0.5 * amplitude * ff1;
+  return { amplitude, rss, aa: ff, ak, kk: (amplitude * amplitude * ff2) / (2 * (1 + order)) };
 }
 
 /**

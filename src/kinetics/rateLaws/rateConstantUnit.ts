@@ -16,6 +16,11 @@ export function rateUnit(dimension: ReadingDimension): string {
   return rateConstantUnit(0, dimension);
 }
 
+/** Unit of the adsorption constant, for example `L mol^-1`. */
+export function reciprocalUnit(dimension: ReadingDimension): string {
+  return { concentration: 'L mol^-1', pressure: 'Pa^-1', ratio: '1' }[dimension];
+}
+
 /**
  * Unit string of k in −dC/dt = k Cⁿ, for example `L mol^-1 s^-1` or `(mol/L)^(-0.5) s^-1`.
  *

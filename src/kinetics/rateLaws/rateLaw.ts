@@ -76,12 +76,14 @@ export function definePowerLaw(form: RelativeForm): RateLaw {
       if (u > exhaustedAt) return 0;
       if (n === 0) return -1;
       const g = form.relative(u);
-      return g > 0 ? -(g ** n) : 0;
+      if (g <= 0) return 0;
+      return n === 1 ? -g : n === 2 ? -g * g : -(g ** n);
     },
     bend(u: number) {
       if (n === 0 || u > exhaustedAt) return 0;
       const g = form.relative(u);
-      return g > 0 ? n * g ** (2 * n - 1) : 0;
+      if (g <= 0) return 0;
+      return n === 1 ? g : n === 2 ? 2 * g * g * g : n * g ** (2 * n - 1);
     },
   };
   return {

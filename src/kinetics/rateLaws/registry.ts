@@ -21,17 +21,22 @@ export function rateLawOf(name: RateLawName, order: number | null): RateLaw | nu
   return name === 'order' ? (order === null ? null : apparentOrder(order)) : findRateLaw(name);
 }
 
+/** A law asked for by name. */
+export interface RequestedLaw {
+  name: RateLawName;
+  /** Null for the saturating law, which has no order. */
+  law: RateLaw | null;
+}
+
 /**
  * The law that a caller forces, or null for the machine's choice.
  *
- * @throws RangeError for a law that this engine version does not hold, or an order out of range
+ * @throws RangeError for an order out of range
  */
-export function requestedRateLaw(request: LawRequest): RateLaw | null {
+export function requestedLaw(request: LawRequest): RequestedLaw | null {
   if (request === 'auto') return null;
-  if (typeof request === 'object') return apparentOrder(request.order);
-  const law = findRateLaw(request);
-  if (law === null) throw new RangeError(`engine does not hold the law "${request}" yet`);
-  return law;
+  const law = typeof request === 'object' ? apparentOrder(request.order) : findRateLaw(request);
+  return { name: law?.name ?? 'saturating', law };
 }
 
 /** The name under which a well's fits hold an order: a registered law's, else `order`. */

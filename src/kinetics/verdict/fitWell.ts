@@ -1,25 +1,25 @@
-import { describeFit, type DescribedFit } from '../fitting/describeFit';
 import { fitApparentOrder, type ApparentOrderFit } from '../fitting/fitApparentOrder';
 import { fitDepartures } from '../fitting/fitDepartures';
-import { fitLaw, type RelativeFit } from '../fitting/fitLaw';
-import { scaleReadings } from '../fitting/problem';
+import type { RelativeFit } from '../fitting/fitLaw';
+import { scaleReadings, type FitProblem } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
-import type { RateLaw } from '../rateLaws/rateLaw';
-import { rateLaws } from '../rateLaws/registry';
+import { rateLaws, type RequestedLaw } from '../rateLaws/registry';
 import { aicc, akaikeWeights } from '../statistics/goodnessOfFit';
+import { intervalFactor } from '../statistics/tDistribution';
 import type { DecaySeries, LawFit, RateLawName } from '../types';
+import {
+  fitOrder,
+  fitOrderWithLevel,
+  fitSaturation,
+  leastRss,
+  type FittedLaw,
+  type FittedOrder,
+} from './fittedLaw';
 import type { Evidence } from './selectRateLaw';
-
-/** One law with its fit in both forms. */
-export interface FittedLaw extends DescribedFit {
-  law: RateLaw;
-  relative: RelativeFit;
-  /** AICc with rss held above rounding; plain AIC where readings are too few for AICc. */
-  criterion: number;
-}
 
 /** Everything fitted to one well. */
 export interface WellFits {
+  /** The laws with an order, then the saturating law, then a forced one. */
   laws: FittedLaw[];
   /** Every fit by name, weights filled in. */
   byName: Partial<Record<RateLawName, LawFit>>;
@@ -28,59 +28,121 @@ export interface WellFits {
   evidence: Evidence | null;
   /** True when the best law fits to within rounding. */
   exact: boolean;
+  /** Size of the readings. */
+  unit: number;
+  /** First order without a level, for the test of whether there is any decay. */
+  plainFirst: RelativeFit;
 }
 
-const ROUNDING = 1e-14;
+const FEWEST_FOR_ORDERS = 5;
+/** AICc of three parameters and the noise needs one more. */
+const FEWEST_FOR_SATURATION = 6;
+/** Where K is bounded on both sides: the coverage's 95 % interval lies within these. */
+const LEAST_COVERAGE = 0.02;
+const MOST_COVERAGE = 0.98;
 
 /**
- * Fits every registered law, a forced one besides, the free order, and the curves that are no
- * simple order.
+ * Fits every registered law, the saturating law, a forced one besides, the free order, and the
+ * curves that are no law to rank by.
  *
  * @param readings at least 3 readings at 3 distinct times
- * @param forced a law to fit besides the registered ones, or null
+ * @param forced a law to fit whatever the readings, or null
  */
-export function fitWell(series: DecaySeries, readings: Readings, forced: RateLaw | null): WellFits {
+export function fitWell(
+  series: DecaySeries,
+  readings: Readings,
+  forced: RequestedLaw | null,
+): WellFits {
   const problem = scaleReadings(readings, series.kind);
   const n = readings.values.length;
-  const floor = n * (ROUNDING * problem.valueScale) ** 2;
   const criterionOf = (rss: number, parameters: number) =>
-    aicc(n, Math.max(rss, floor), parameters);
-  const plainOf = (rss: number, parameters: number) =>
-    n * Math.log(Math.max(rss, floor) / n) + 2 * parameters;
+    aicc(n, Math.max(rss, leastRss(problem)), parameters);
 
-  const fitOne = (law: RateLaw): FittedLaw => {
-    const relative = fitLaw(problem, law);
-    const criterion =
-      criterionOf(relative.rss, relative.parameters) ?? plainOf(relative.rss, relative.parameters);
-    return { law, relative, criterion, ...describeFit(relative, series, readings) };
-  };
-  const laws = rateLaws.map(fitOne);
-  const byName: WellFits['byName'] = {};
-  const weighed = n >= 5 ? akaikeWeights(laws.map((fitted) => fitted.criterion)) : null;
-  laws.forEach((fitted, i) => {
-    fitted.fit.weight = weighed?.[i] ?? null;
-    byName[fitted.law.name] = fitted.fit;
-  });
-  if (forced !== null && !rateLaws.includes(forced)) {
-    const fitted = fitOne(forced);
-    laws.push(fitted);
-    byName[forced.name] = fitted.fit;
+  const orders = rateLaws.map((law) => fitOrder(problem, law, series, readings));
+  const byOrder = (order: number) => orders.find(({ law }) => law.order === order)!.relative;
+  const saturation =
+    n >= FEWEST_FOR_SATURATION || forced?.name === 'saturating'
+      ? fitSaturation(problem, byOrder(1), byOrder(0), series, readings)
+      : null;
+  const weighable = saturation !== null && n >= FEWEST_FOR_SATURATION ? saturation : null;
+  const tried: FittedLaw[] = weighable === null ? orders : [...orders, weighable];
+  const weights = n >= FEWEST_FOR_ORDERS ? akaikeWeights(tried.map((one) => one.criterion)) : null;
+  tried.forEach((fitted, i) => (fitted.fit.weight = weights?.[i] ?? null));
+
+  const laws: FittedLaw[] = saturation === null ? [...orders] : [...orders, saturation];
+  const another = forced?.law ?? null;
+  if (another !== null && !rateLaws.includes(another)) {
+    laws.push(fitOrder(problem, another, series, readings));
   }
+  const byName: WellFits['byName'] = {};
+  for (const fitted of laws) byName[fitted.name] = fitted.fit;
 
-  const tried = laws.slice(0, rateLaws.length);
-  const apparentOrder = fitApparentOrder(tried.map((fitted) => fitted.relative));
-  const exact = tried.some((fitted) => fitted.relative.rss <= floor);
-  return {
+  const apparentOrder = fitApparentOrder(orders.map((fitted) => fitted.relative));
+  const plain: WellFits = {
     laws,
     byName,
     apparentOrder,
-    evidence: n >= 5 ? gatherEvidence(tried, apparentOrder, criterionOf) : null,
-    exact,
+    evidence:
+      n >= FEWEST_FOR_ORDERS
+        ? gatherEvidence(orders, weighable, byOrder(1), apparentOrder, criterionOf)
+        : null,
+    exact: tried.some((fitted) => fitted.fit.rss <= leastRss(problem)),
+    unit: problem.valueScale,
+    plainFirst: byOrder(1),
+  };
+  return series.level === true ? withLevel(plain, problem, series, readings, forced) : plain;
+}
+
+/**
+ * Fits the laws that have an order with a level that stays. Without a free order beside it the choice
+ * between them rests on their evidence alone, at ten times the usual ratio.
+ *
+ * @param plain the same well's fits without a level, which stand in where no approach is found
+ */
+function withLevel(
+  plain: WellFits,
+  problem: FitProblem,
+  series: DecaySeries,
+  readings: Readings,
+  forced: RequestedLaw | null,
+): WellFits {
+  const wanted = forced?.law != null && !rateLaws.includes(forced.law) ? [forced.law] : [];
+  const fitted = [...rateLaws, ...wanted].flatMap(
+    (law) => fitOrderWithLevel(problem, law, series, readings) ?? [],
+  );
+  if (fitted.length < rateLaws.length) return plain;
+  const tried = fitted.slice(0, rateLaws.length);
+  const weights = akaikeWeights(tried.map(({ criterion }) => criterion));
+  const weighed = readings.values.length >= FEWEST_FOR_SATURATION;
+  tried.forEach(({ fit }, i) => (fit.weight = weighed ? weights[i]! : null));
+  const byName: WellFits['byName'] = {};
+  for (const { name, fit } of fitted) byName[name] = fit;
+  return {
+    ...plain,
+    laws: fitted,
+    byName,
+    apparentOrder: null,
+    evidence: !weighed
+      ? null
+      : {
+          laws: tried.map(({ name, law, criterion }) => ({
+            name,
+            order: law!.order,
+            aicc: criterion,
+          })),
+          rivals: {},
+          rivalCharge: 0,
+          coverage: null,
+          withLevel: true,
+        },
+    exact: tried.some(({ fit }) => fit.rss <= leastRss(problem)),
   };
 }
 
 function gatherEvidence(
-  tried: readonly FittedLaw[],
+  orders: readonly FittedOrder[],
+  saturation: FittedLaw | null,
+  first: RelativeFit,
   apparentOrder: ApparentOrderFit | null,
   criterionOf: (rss: number, parameters: number) => number | null,
 ): Evidence {
@@ -90,20 +152,23 @@ function gatherEvidence(
     if (criterion !== null) rivals[name] = criterion;
   };
   if (apparentOrder !== null) add('order', apparentOrder.rss, apparentOrder.parameters);
-  const first = tried.find((fitted) => fitted.law.order === 1);
-  const laws = first?.relative.problem.mode === 'fraction' ? 1 : 2;
-  const unit = (first?.relative.problem.valueScale ?? 1) ** 2;
-  if (first !== undefined) {
-    for (const { name, rss, parameters } of fitDepartures(first.relative))
-      add(name, rss, parameters);
-  }
+  for (const { name, rss, parameters } of fitDepartures(first)) add(name, rss, parameters);
+  if (saturation !== null) rivals.saturating = saturation.criterion;
+  const parameters = orders[0]!.parameters;
+  const unit = first.problem.valueScale ** 2;
   return {
-    laws: tried.map(({ law, criterion }) => ({
-      name: law.name,
-      order: law.order,
-      aicc: criterion,
-    })),
+    laws: orders.map(({ name, law, criterion }) => ({ name, order: law.order, aicc: criterion })),
     rivals,
-    rivalCharge: (criterionOf(unit, laws + 1) ?? 0) - (criterionOf(unit, laws) ?? 0),
+    rivalCharge: (criterionOf(unit, parameters + 1) ?? 0) - (criterionOf(unit, parameters) ?? 0),
+    coverage: saturation === null ? null : coverageRange(saturation),
   };
+}
+
+/** The coverage's 95 % interval, where it lies inside the law. */
+function coverageRange({ fit }: FittedLaw): Evidence['coverage'] {
+  const { coverage, coverageSe } = fit.saturation!;
+  if (coverageSe === null) return null;
+  const half = intervalFactor(fit.dof) * coverageSe;
+  const bounded = coverage - half > LEAST_COVERAGE && coverage + half < MOST_COVERAGE;
+  return { value: coverage, bounded };
 }

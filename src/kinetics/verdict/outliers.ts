@@ -1,5 +1,5 @@
 import { studentTQuantile } from '../statistics/tDistribution';
-import { leveragesOf, residualsOf, type RelativeFit } from '../fitting/fitLaw';
+import { leveragesOfLaw, residualsOfLaw, type FittedLaw } from './fittedLaw';
 
 /** Chance that a well without outliers has any reading pointed out (Bonferroni over readings). */
 const OUTLIER_LEVEL = 0.002;
@@ -22,19 +22,24 @@ function outlierLimit(n: number, dof: number): number {
  * Points out readings whose externally studentised residual is beyond chance (Cook & Weisberg
  * 1982). Nothing is dropped.
  *
+ * @param unit size of the readings
  * @param indices index of each reading in the series as given
  * @returns indices into the series as given, ascending
  */
-export function findOutliers(fit: RelativeFit, indices: readonly number[]): number[] {
-  const dof = fit.dof - 1;
-  const leverages = leveragesOf(fit);
-  if (dof < 1 || leverages === null) return [];
+export function findOutliers(
+  fitted: FittedLaw,
+  unit: number,
+  indices: readonly number[],
+): number[] {
+  const dof = fitted.fit.dof - 1;
+  const leverages = dof < 1 ? null : leveragesOfLaw(fitted);
+  if (leverages === null) return [];
   const limit = outlierLimit(leverages.length, dof);
   const found: number[] = [];
-  residualsOf(fit).forEach((residual, i) => {
+  residualsOfLaw(fitted).forEach((residual, i) => {
     const free = 1 - leverages[i]!;
-    if (free < 1e-9 || Math.abs(residual) < ROUNDING * fit.problem.valueScale) return;
-    const without = Math.max(fit.rss - (residual * residual) / free, 0) / dof;
+    if (free < 1e-9 || Math.abs(residual) < ROUNDING * unit) return;
+    const without = Math.max(fitted.fit.rss - (residual * residual) / free, 0) / dof;
     const t = without > 0 ? Math.abs(residual) / Math.sqrt(without * free) : Infinity;
     if (t > limit) found.push(indices[i]!);
   });

@@ -66,6 +66,12 @@ describe('a stored analysis', () => {
     const board = await viewLeaderboard(services.db, group.viewers.viewer, group.campaignId);
     expect(board.rows.map((row) => row.analysisId)).toEqual([two.id, two.id]);
     expect(board.rows.map((row) => row.code)).toEqual(['A-1', 'A-2']);
+    const places = board.rows.map((row) => row.ranks.rate?.rank ?? 0);
+    expect(places.sort()).toEqual([1, 2]);
+    const [fastest] = [...board.rows].sort(
+      (a, b) => (b.rateRef?.value ?? 0) - (a.rateRef?.value ?? 0),
+    );
+    expect(fastest?.ranks.rate).toMatchObject({ rank: 1, tiedWithBest: true });
     const view = await viewScreen(services.db, group.viewers.viewer, screenId);
     expect(view.analyses[0]?.id).toBe(two.id);
     expect(view.wells.every((well) => well.verdict === 'first')).toBe(true);

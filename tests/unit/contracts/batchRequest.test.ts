@@ -155,13 +155,12 @@ describe('refusals', () => {
   });
 
   it.each([
-    ['law', { law: 'saturating' }],
-    ['residual', { residual: true }],
-    ['baseline', { baseline: true }],
-  ])('%s that this engine does not hold says so', (key, given) => {
+    ['residual', { residual: true, law: 'saturating' }, 'not beside saturation'],
+    ['baseline', { baseline: true }, 'Only a signal'],
+  ])('%s where it cannot be says so', (key, given, message) => {
     const [fault] = problemOf({ series: [{ ...batchSeries(), ...given }] }).errors;
     expect(fault!.path).toBe(`/series/0/${key}`);
-    expect(fault!.message).toContain('does not have it yet');
+    expect(fault!.message).toContain(message);
   });
 
   it('a sample without its catalyst', () => {

@@ -1,9 +1,17 @@
 import { describe, expect, it } from 'vitest';
 import { firstLook, type LeaderboardLook } from '../../../../src/islands/leaderboard/address';
-import { arrange, type LeaderboardLine } from '../../../../src/islands/leaderboard/arrange';
-import { estimate, leaderboardRow } from '../../../fixtures/views';
+import {
+  arrange as arrangeRanked,
+  type LeaderboardLine,
+} from '../../../../src/islands/leaderboard/arrange';
+import { rankSentence, rankSpan } from '../../../../src/islands/leaderboard/RankMark';
+import type { LeaderboardRow } from '../../../../src/contracts/leaderboard';
+import { estimate, leaderboardRow, withRanks } from '../../../fixtures/views';
 
 const look = (more: Partial<LeaderboardLook> = {}): LeaderboardLook => ({ ...firstLook, ...more });
+
+const arrange = (rows: readonly LeaderboardRow[], how: LeaderboardLook) =>
+  arrangeRanked(withRanks(rows), how);
 
 const read = (lines: LeaderboardLine[]) =>
   lines.map((line) => (line.kind === 'heading' ? `# ${line.title}` : line.row.code));
@@ -67,6 +75,35 @@ describe('sorting by a rate', () => {
     const lines = arrange(rows, look({ search: 'slow' }));
     expect(read(lines)).toEqual(['Slow']);
     expect(ranks(lines)).toEqual([3]);
+  });
+});
+
+describe('what a rank says', () => {
+  it('gives the interval beside the place and says it in a sentence', () => {
+    const rank = { place: 2, low: 1, high: 4, tied: true, chanceAmongFirst: 0.874 };
+    expect(rankSpan(rank)).toBe('(1–4)');
+    expect(rankSentence(rank)).toBe(
+      'Rank 2; between 1 and 4 in 95 % of cases. Cannot be told from the best. Chance to be among the first 3: 87 %.',
+    );
+  });
+
+  it('says nothing of an interval that is one rank, or that is not known', () => {
+    expect(rankSpan({ low: 3, high: 3 })).toBe('');
+    expect(rankSpan({ low: null, high: null })).toBe('');
+    expect(
+      rankSentence({ place: 9, low: null, high: null, tied: false, chanceAmongFirst: null }),
+    ).toContain('has no interval');
+  });
+
+  it('spans the ranks of neighbours that cannot be told apart, and no further', () => {
+    const spans = arrange([slow, nearly, fast], look()).map((line) =>
+      line.kind === 'row' && line.rank ? [line.rank.low, line.rank.high] : null,
+    );
+    expect(spans).toEqual([
+      [1, 2],
+      [1, 2],
+      [3, 3],
+    ]);
   });
 });
 

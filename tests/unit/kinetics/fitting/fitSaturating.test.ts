@@ -72,7 +72,7 @@ describe('fitSaturating', () => {
         const { found } = fit(scaleReadings(readingsOf(times, values), kind));
         expect(found.kRel / 3600 / kRel).toBeCloseTo(1, 7);
         expect(found.coverage).toBeCloseTo(coverage, 7);
-        expect(found.rss).toBeLessThan(1e-20);
+        expect(found.rss).toBeLessThan(1e-18);
       }
     },
   );
