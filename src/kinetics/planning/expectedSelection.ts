@@ -1,6 +1,7 @@
 import { fitDepartures } from '../fitting/fitDepartures';
-import { fitLaw } from '../fitting/fitLaw';
-import { MODE } from '../fitting/problem';
+import { fitLaw, type RelativeFit } from '../fitting/fitLaw';
+import { fitSaturating } from '../fitting/fitSaturating';
+import { MODE, type FitProblem } from '../fitting/problem';
 import { aicc, evidenceRatio } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
 import {
@@ -28,6 +29,9 @@ export interface ExpectedSelection {
  * tests/unit/kinetics/planning/discriminatingTimes.test.ts.
  */
 const SAFETY = 1.28;
+
+/** The saturating law and the noise take 4 parameters, AICc two readings more. */
+const FEWEST_FOR_SATURATION = 6;
 
 /**
  * The verdict expected from readings at given times when one law is true.
@@ -59,7 +63,7 @@ export function expectedSelection(
     const left = Math.max(lambda - 2 * SAFETY * Math.sqrt(lambda), 0);
     return aicc(n, n - parameters + left, parameters);
   };
-  const evidence: Evidence = { laws: [], rivals: {}, rivalCharge: 0 };
+  const evidence: Evidence = { laws: [], rivals: {}, rivalCharge: 0, coverage: null };
   for (const fit of fits) {
     const value =
       fit === own
@@ -72,6 +76,11 @@ export function expectedSelection(
     const value = criterion(rss, parameters);
     if (value !== null) evidence.rivals[name] = value;
   }
+  const saturated = saturatingRss(problem, fits);
+  if (n >= FEWEST_FOR_SATURATION && saturated !== null) {
+    const value = criterion(saturated, own.parameters + 1);
+    if (value !== null) evidence.rivals.saturating = value;
+  }
   const free = expectedOrder(curve, timesS);
   const selection = selectRateLaw(evidence, free);
   const [best, rival] = evidence.laws.map((law) => law.aicc).sort((a, b) => a - b);
@@ -80,6 +89,17 @@ export function expectedSelection(
     evidenceRatio: Math.min(evidenceRatio(best!, rival!), Number.MAX_VALUE),
     orderSe: expectedOrderSe(curve, timesS),
   };
+}
+
+/** What the saturating law leaves of the predicted readings; 0 where it holds the true law. */
+function saturatingRss(problem: FitProblem, fits: readonly RelativeFit[]): number | null {
+  const unit = problem.valueScale ** 2;
+  const [zero, first] = [0, 1].map((order) => {
+    const fit = fits.find(({ law }) => law.order === order)!;
+    return { kRel: (fit.kRel ?? 0) * problem.timeScale, rss: fit.rss / unit };
+  });
+  const { rss } = fitSaturating(problem, first!, zero!);
+  return Number.isFinite(rss) ? rss * unit : null;
 }
 
 /** Whether the true law is expected to be asserted; quick where the free order already forbids it. */

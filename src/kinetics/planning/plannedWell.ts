@@ -36,7 +36,8 @@ export function competingLaws(): RateLaw[] {
  * The curve of one law through a well, to predict further readings by.
  *
  * @param residualSd noise of one reading; the fit's own where it is not given
- * @returns null where the well does not hold the curve: no decay, C0 open, noise unknown
+ * @returns null where the well does not hold the curve: no decay, C0 open, noise unknown, a
+ *   level beside it
  */
 export function expectedCurve(
   analysis: SeriesAnalysis,
@@ -45,7 +46,7 @@ export function expectedCurve(
 ): ExpectedCurve | null {
   const law = findRateLaw(name);
   const fit = analysis.fits[name];
-  if (law === null || fit == null) return null;
+  if (law === null || fit == null || fit.level != null) return null;
   const { kRel, originS } = fit;
   const amplitude =
     analysis.kind === 'conversion'

@@ -100,7 +100,7 @@ export type Proposal =
       hotterK: number | null;
     }
   | {
-      /** What goes on without the catalyst matters. */
+      /** What goes on without the catalyst matters, and could not be taken off here. */
       code: 'run-blanks';
       temperaturesK: number[];
     };

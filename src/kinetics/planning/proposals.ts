@@ -51,7 +51,9 @@ export function proposals(
   }
   plans.push(...tightenEnergy(catalyst, own, range, options));
   if (warnings.includes('blank-reacts')) {
-    plans.push({ code: 'run-blanks', temperaturesK: temperaturesOf(reacting(own)) });
+    const gross = reacting(own).filter(({ analysis }) => analysis.net === null);
+    const temperaturesK = temperaturesOf(gross.length > 0 ? gross : reacting(own));
+    plans.push({ code: 'run-blanks', temperaturesK });
   }
   return plans;
 }
