@@ -1,3 +1,4 @@
+import type { Proposal } from '../kinetics/planning/proposal';
 import type { CatalystAnalysis, SeriesAnalysis, WarningCode, WellRole } from '../kinetics/types';
 import type { DecisionRecord, DecisionState } from './decisions';
 import type { CampaignSummary } from './leaderboard';
@@ -56,6 +57,8 @@ export interface CandidateView {
   result: CatalystAnalysis;
   warnings: { code: WarningCode; sentence: string }[];
   explanation: string;
+  /** What to run next; empty where nothing is open. */
+  proposals: { code: Proposal['code']; sentence: string }[];
   wells: CandidateWell[];
   /** Arrhenius line and band: 1000/T in kK⁻¹ against ln k. */
   arrhenius: {

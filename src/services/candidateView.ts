@@ -7,7 +7,13 @@ import { listTags } from '../db/repositories/candidates';
 import { findCampaign, type CatalystRow } from '../db/repositories/campaigns';
 import { listWells, type WellWithNames } from '../db/repositories/screens';
 import { problems } from '../errors';
-import { explainCatalyst, explainSeries, explainWarning } from '../kinetics';
+import {
+  explainCatalyst,
+  explainProposal,
+  explainSeries,
+  explainWarning,
+  proposals,
+} from '../kinetics';
 import type { CatalystAnalysis, SeriesAnalysis } from '../kinetics/types';
 import { drawnArrhenius, drawnCurves } from '../screening/drawing';
 import { summariseCampaign } from './campaigns';
@@ -75,6 +81,18 @@ async function loadWells(
   });
 }
 
+/** What to run next, planned on the readings that count. */
+function nextRuns(result: CatalystAnalysis, wells: readonly CandidateWell[]) {
+  const planned = wells.map(({ analysis, timesS, values }) => ({
+    analysis,
+    timesS: timesS.filter((_, index) => values[index] !== null).sort((a, b) => a - b),
+  }));
+  return proposals(result, planned).map((proposal) => ({
+    code: proposal.code,
+    sentence: explainProposal(proposal),
+  }));
+}
+
 /** The candidates before and after this one, by code. */
 function neighbours(results: CurrentResult[], catalystId: string) {
   const ordered = results
@@ -126,6 +144,7 @@ export async function viewCandidate(
     result,
     warnings: inWords(result.warnings),
     explanation: explainCatalyst(result),
+    proposals: nextRuns(result, wells),
     wells,
     arrhenius: drawnArrhenius(result),
     decision,

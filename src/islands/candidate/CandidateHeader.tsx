@@ -5,6 +5,7 @@ import { formatDay } from '../dates';
 import { verdictWord } from '../../screening/decayMarks';
 import { FigureText } from './FigureText';
 import { cardFacts, compositionOf, headerFigures } from './headerFigures';
+import { NextRuns } from './NextRuns';
 import { Warnings } from './Warnings';
 
 /** Who the candidate is, what was found, and the numbers that it is judged by. */
@@ -64,6 +65,7 @@ export function CandidateHeader({ view }: { view: CandidateView }) {
       </dl>
 
       <Warnings warnings={view.warnings} except={view.explanation} className="mt-6" />
+      <NextRuns proposals={view.proposals} className="mt-6" />
 
       <p className="text-quiet mt-4 text-[13px] leading-5">
         {cardFacts(view).map(([name, value], index) => (
