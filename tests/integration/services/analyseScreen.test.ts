@@ -145,7 +145,8 @@ describe('a stored analysis', () => {
     const [well] = page.wells;
     expect(well?.source).toMatchObject({ column: 'I' });
     expect(well?.source.rows.slice(0, 2)).toEqual([2, 3]);
-    expect(well?.curves.laws.map((curve) => curve.law).sort()).toEqual(['first', 'second', 'zero']);
+    const drawn = well?.curves.laws.map((curve) => curve.law).sort();
+    expect(drawn).toEqual(['first', 'saturating', 'second', 'zero']);
     const band = well?.curves.band;
     expect(band?.low.every((low, index) => low <= (band.high[index] ?? 0))).toBe(true);
     expect(page.arrhenius?.points).toHaveLength(4);
