@@ -31,6 +31,12 @@ export type Verdict =
   | 'unusable'
   | 'forced';
 
+/** Standard deviation of a reading: σ² = absolute² + (relative · reading)²; base unit, and a share. */
+export interface Precision {
+  absolute: number;
+  relative: number;
+}
+
 /** A well's readings as measured, ready for the engine. */
 export interface DecaySeries {
   /** Unique within one run of the engine. */
@@ -59,6 +65,8 @@ export interface DecaySeries {
   /** Stoichiometric coefficient of the reactant followed, above 0. */
   nu: number;
   law: LawRequest;
+  /** Declared precision of the readings; without it their noise is constant and estimated. */
+  precision?: Precision | null;
   /** Fits a level that stays: C∞, or the baseline of a signal. */
   level?: boolean;
 }

@@ -26,6 +26,12 @@ function fill(problem: FitProblem, law: RateLaw, kRel: number): void {
   makeRoom(problem.t.length);
   if (problem.mode === 'decay') law.decayFill(kRel, problem.t, f, byRate);
   else law.growthFill(kRel, problem.t, f, byRate);
+  const { roots } = problem;
+  if (roots === null) return;
+  for (let i = 0; i < roots.length; i += 1) {
+    f[i]! *= roots[i]!;
+    byRate[i]! *= roots[i]!;
+  }
 }
 
 /** The curve of a law at kRel with the amplitude that fits best, or 1 for a fraction. */

@@ -66,7 +66,7 @@ export function fitApparentOrder(fits: readonly RelativeFit[]): ApparentOrderFit
   let best: ShapeFit | null = null;
   for (const fit of starts) {
     const start = { p: Math.log(fit.kRel! * problem.timeScale), q: startOrder(fit.law.order) };
-    const found = fitShape(fill, problem.t, problem.y, start, range, fixed, SMALLEST_GAIN);
+    const found = fitShape(fill, problem, start, range, fixed, SMALLEST_GAIN);
     if (best === null || found.rss < best.rss) best = found;
   }
   const { q: order, rss, inverse } = best!;

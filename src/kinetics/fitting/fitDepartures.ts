@@ -73,7 +73,7 @@ const dyingGrowth = deactivating(true);
 export function fitDepartures(first: RelativeFit): Departure[] {
   const { problem } = first;
   if (first.kRel === null || first.amplitude === null || !(first.kRel > 0)) return [];
-  const { t, y, mode } = problem;
+  const { mode } = problem;
   const kappa = first.kRel * problem.timeScale;
   const unit = problem.valueScale ** 2;
   const fixed = mode === 'fraction';
@@ -83,7 +83,7 @@ export function fitDepartures(first: RelativeFit): Departure[] {
   for (const delta of [0.5, 3]) {
     const start = { p: Math.log(kappa * (1 + delta / 2)), q: delta };
     const fill = mode === 'decay' ? dyingDecay : dyingGrowth;
-    rss = Math.min(rss, fitShape(fill, t, y, start, range, fixed, SMALLEST_GAIN).rss);
+    rss = Math.min(rss, fitShape(fill, problem, start, range, fixed, SMALLEST_GAIN).rss);
   }
   departures.push({ name: 'deactivating', rss: rss * unit, parameters: fixed ? 2 : 3 });
 
@@ -91,7 +91,7 @@ export function fitDepartures(first: RelativeFit): Departure[] {
     rss = first.rss / unit;
     for (const faster of [1.3, 4]) {
       const start = { p: Math.log(kappa * faster), q: 0.4 };
-      const found = fitShape(plateau, t, y, start, range, false, SMALLEST_GAIN);
+      const found = fitShape(plateau, problem, start, range, false, SMALLEST_GAIN);
       if (found.amplitude > 0) rss = Math.min(rss, found.rss);
     }
     departures.push({ name: 'plateau', rss: rss * unit, parameters: 3 });

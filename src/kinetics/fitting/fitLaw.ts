@@ -42,17 +42,18 @@ export function fitLaw(problem: FitProblem, law: RateLaw): RelativeFit {
   if (law.order === 0) {
     const zero = searchExhaustion(problem);
     if (zero.slopeOnly !== null) return growthLine(problem, law, zero.slopeOnly);
-    return complete(problem, law, zero);
+    return completeFit(problem, law, zero);
   }
   const found = searchRelativeRate(problem, law);
   const line = found.amplitude * found.kRel;
   if (problem.mode === 'growth' && found.atBound && found.kRel < 1e-3) {
     return growthLine(problem, law, line);
   }
-  return complete(problem, law, found);
+  return completeFit(problem, law, found);
 }
 
-function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeFit {
+/** Growth along a straight line, of a scaled slope. */
+export function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeFit {
   const { t, y, valueScale, timeScale } = problem;
   const squares = t.reduce((sum, value) => sum + value * value, 0);
   const rss = y.reduce((sum, value, i) => sum + (value - slope * t[i]!) ** 2, 0);
@@ -75,7 +76,8 @@ function growthLine(problem: FitProblem, law: RateLaw, slope: number): RelativeF
   };
 }
 
-function complete(problem: FitProblem, law: RateLaw, found: RelativeRate): RelativeFit {
+/** What follows from an optimum: covariance, degrees of freedom, base units. */
+export function completeFit(problem: FitProblem, law: RateLaw, found: RelativeRate): RelativeFit {
   const { amplitude, kRel, atBound } = found;
   const { mode, valueScale, timeScale } = problem;
   const sums = found.sums ?? curveSums(problem, law, kRel, amplitude);

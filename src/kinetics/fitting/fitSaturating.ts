@@ -245,7 +245,7 @@ export function fitSaturating(
   const growing = problem.mode === 'growth';
   if (!growing && first.rss < zero.rss && first.kRel > 1e-3) {
     const bare = placeAt(problem, yy, first.kRel, 0);
-    if (bare.gs > 0) return finish(problem, bare);
+    if (bare.gs > 0) return finishSaturating(problem, bare);
   }
   // The better a limit fits, the nearer to it the search begins.
   const [a, b] = [Math.sqrt(first.rss), Math.sqrt(zero.rss)];
@@ -263,7 +263,7 @@ export function fitSaturating(
     const again = descend(problem, yy, rate, 0.03);
     if (again.rss < at.rss) at = again;
   }
-  return finish(problem, at);
+  return finishSaturating(problem, at);
 }
 
 /** The curve at an optimum with its derivatives by kRel and coverage, on the scaled readings. */
@@ -279,7 +279,19 @@ function curveAt(problem: FitProblem, kRel: number, coverage: number) {
     byRate[i] = sign * wr;
     byCoverage[i] = sign * ws;
   });
-  const amplitude = problem.mode === 'fraction' ? 1 : trial.p / trial.q;
+  const { roots, y } = problem;
+  let amplitude = problem.mode === 'fraction' ? 1 : trial.p / trial.q;
+  if (roots !== null) {
+    let [fy, ff] = [0, 0];
+    for (let i = 0; i < n; i += 1) {
+      f[i]! *= roots[i]!;
+      byRate[i]! *= roots[i]!;
+      byCoverage[i]! *= roots[i]!;
+      fy += f[i]! * y[i]!;
+      ff += f[i]! * f[i]!;
+    }
+    if (problem.mode !== 'fraction') amplitude = fy / ff;
+  }
   return { f, byRate, byCoverage, amplitude };
 }
 
@@ -304,7 +316,11 @@ export function saturatingLeverages(problem: FitProblem, fit: SaturatingFit): nu
   });
 }
 
-function finish(problem: FitProblem, { kRel, coverage }: Place): SaturatingFit {
+/** The fit at an optimum, with its inverse normal matrix. */
+export function finishSaturating(
+  problem: FitProblem,
+  { kRel, coverage }: Pick<Place, 'kRel' | 'coverage'>,
+): SaturatingFit {
   const { y, mode } = problem;
   const { f, byRate, byCoverage, amplitude } = curveAt(problem, kRel, coverage);
   let [rss, ff, rr, rs, ss, fr, fs] = [0, 0, 0, 0, 0, 0, 0];

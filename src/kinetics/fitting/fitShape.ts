@@ -1,3 +1,5 @@
+import type { FitProblem } from './problem';
+
 /**
  * A shape f(t; p, q) over all readings: fills in f, ∂f/∂p and ∂f/∂q, each as long as `t`.
  */
@@ -71,16 +73,16 @@ const trials: [Trial, Trial] = [emptyTrial(), emptyTrial()];
  */
 export function fitShape(
   fill: TwoParameterFill,
-  t: Float64Array,
-  y: Float64Array,
+  problem: Pick<FitProblem, 't' | 'y' | 'roots'>,
   start: { p: number; q: number },
   range: ShapeRange,
   fixed: boolean,
   smallestGain: number,
 ): ShapeFit {
+  const { t, y, roots } = problem;
   makeRoom(t.length);
   let [best, trial] = trials;
-  tryAt(best, fill, t, y, start.p, start.q, fixed);
+  tryAt(best, fill, t, y, roots, start.p, start.q, fixed);
   let damping = 1e-3;
   for (let i = 0; i < MOST_STEPS && damping < MOST_DAMPING; i += 1) {
     const step = dampedStep(best, range, damping);
@@ -89,7 +91,7 @@ export function fitShape(
     // What the linearised curve promises; near the optimum it is what is still to be had.
     const promised = (p - best.p) * best.gp + (q - best.q) * best.gq;
     if (!(promised > 0)) break;
-    tryAt(trial, fill, t, y, p, q, fixed);
+    tryAt(trial, fill, t, y, roots, p, q, fixed);
     const gained = trial.rss < best.rss;
     if (gained) [best, trial] = [trial, best];
     if (promised < smallestGain * best.rss) break;
@@ -142,12 +144,20 @@ function tryAt(
   fill: TwoParameterFill,
   t: Float64Array,
   y: Float64Array,
+  roots: Float64Array | null,
   p: number,
   q: number,
   fixed: boolean,
 ): void {
   fill(p, q, t, f, byP, byQ);
   const n = t.length;
+  if (roots !== null) {
+    for (let i = 0; i < n; i += 1) {
+      f[i]! *= roots[i]!;
+      byP[i]! *= roots[i]!;
+      byQ[i]! *= roots[i]!;
+    }
+  }
   let [fy, ff, fp, fq, pp, pq, qq] = [0, 0, 0, 0, 0, 0, 0];
   for (let i = 0; i < n; i += 1) {
     const fi = f[i]!;

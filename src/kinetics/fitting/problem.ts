@@ -11,8 +11,10 @@ export interface FitProblem {
   mode: ReadingMode;
   /** Times since `originS`, divided by `timeScale`; ascending, not negative. */
   t: Float64Array;
-  /** Readings divided by `valueScale`. */
+  /** Readings divided by `valueScale`, times `roots` where there are some. */
   y: Float64Array;
+  /** Square roots of the readings' weights, which shapes are multiplied by too; null for equal ones. */
+  roots: Float64Array | null;
   /** s on the clock of the readings: where u = 0. */
   originS: number;
   timeScale: number;
@@ -87,5 +89,17 @@ export function scaleReadings(readings: Readings, kind: ReadingKind): FitProblem
     spread += distance * distance;
     squares += y[i]! * y[i]!;
   }
-  return { mode, t, y, originS, timeScale, valueScale, firstStep: firstStep || 1, squares, spread };
+  const roots = null;
+  return {
+    mode,
+    t,
+    y,
+    roots,
+    originS,
+    timeScale,
+    valueScale,
+    firstStep: firstStep || 1,
+    squares,
+    spread,
+  };
 }

@@ -66,12 +66,14 @@ function crossing(excess: (lnK: number) => number, firstStep: number, farthest: 
 
 /** RSS as a function of k over its best value, the amplitude fitted anew; scaled. */
 function profileOf(problem: FitProblem, law: RateLaw, amplitude: number, kRel: number) {
-  const { t, y, mode } = problem;
+  const { t, y, mode, roots } = problem;
   const n = law.order;
   const shape = (u: number) => (mode === 'decay' ? law.relative(u) : law.converted(u));
   const rss = (rate: number, a: number) => {
     let sum = 0;
-    for (let i = 0; i < t.length; i += 1) sum += (y[i]! - a * shape(rate * t[i]!)) ** 2;
+    for (let i = 0; i < t.length; i += 1) {
+      sum += (y[i]! - a * shape(rate * t[i]!) * (roots?.[i] ?? 1)) ** 2;
+    }
     return sum;
   };
   if (mode === 'fraction') return (multiple: number) => rss(kRel * multiple, 1);
@@ -79,7 +81,7 @@ function profileOf(problem: FitProblem, law: RateLaw, amplitude: number, kRel: n
     return (multiple: number) => {
       let [fy, ff] = [0, 0];
       for (let i = 0; i < t.length; i += 1) {
-        const f = shape(kRel * multiple * t[i]!);
+        const f = shape(kRel * multiple * t[i]!) * (roots?.[i] ?? 1);
         fy += f * y[i]!;
         ff += f * f;
       }

@@ -1,17 +1,21 @@
 import { fitApparentOrder, type ApparentOrderFit } from '../fitting/fitApparentOrder';
 import { fitDepartures } from '../fitting/fitDepartures';
 import type { RelativeFit } from '../fitting/fitLaw';
+import { weighted } from '../fitting/fitWeighted';
 import { scaleReadings, type FitProblem } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
 import { rateLaws, type RequestedLaw } from '../rateLaws/registry';
 import { aicc, akaikeWeights } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
-import type { DecaySeries, LawFit, RateLawName } from '../types';
+import type { DecaySeries, LawFit, Precision, RateLawName } from '../types';
 import {
   fitOrder,
   fitOrderWithLevel,
   fitSaturation,
   leastRss,
+  residualsOfLaw,
+  weighOrder,
+  weighSaturation,
   type FittedLaw,
   type FittedOrder,
 } from './fittedLaw';
@@ -58,22 +62,33 @@ export function fitWell(
   const criterionOf = (rss: number, parameters: number) =>
     aicc(n, Math.max(rss, leastRss(problem)), parameters);
 
-  const orders = rateLaws.map((law) => fitOrder(problem, law, series, readings));
-  const byOrder = (order: number) => orders.find(({ law }) => law.order === order)!.relative;
-  const saturation =
-    n >= FEWEST_FOR_SATURATION || forced?.name === 'saturating'
-      ? fitSaturation(problem, byOrder(1), byOrder(0), series, readings)
-      : null;
+  const wanted = forced?.law ?? null;
+  const fitsTo: PlainFits = {
+    orders: rateLaws.map((law) => fitOrder(problem, law, series, readings)),
+    saturation: null,
+    forced:
+      wanted === null || rateLaws.includes(wanted)
+        ? null
+        : fitOrder(problem, wanted, series, readings),
+  };
+  const plainFirst = ofOrder(fitsTo.orders, 1);
+  if (n >= FEWEST_FOR_SATURATION || forced?.name === 'saturating') {
+    const zero = ofOrder(fitsTo.orders, 0);
+    fitsTo.saturation = fitSaturation(problem, plainFirst, zero, series, readings);
+  }
+  const precision = series.precision ?? null;
+  const {
+    orders,
+    saturation,
+    forced: another,
+  } = precision === null ? fitsTo : weighFits(problem, fitsTo, precision, series, readings);
   const weighable = saturation !== null && n >= FEWEST_FOR_SATURATION ? saturation : null;
   const tried: FittedLaw[] = weighable === null ? orders : [...orders, weighable];
   const weights = n >= FEWEST_FOR_ORDERS ? akaikeWeights(tried.map((one) => one.criterion)) : null;
   tried.forEach((fitted, i) => (fitted.fit.weight = weights?.[i] ?? null));
 
   const laws: FittedLaw[] = saturation === null ? [...orders] : [...orders, saturation];
-  const another = forced?.law ?? null;
-  if (another !== null && !rateLaws.includes(another)) {
-    laws.push(fitOrder(problem, another, series, readings));
-  }
+  if (another !== null) laws.push(another);
   const byName: WellFits['byName'] = {};
   for (const fitted of laws) byName[fitted.name] = fitted.fit;
 
@@ -84,13 +99,52 @@ export function fitWell(
     apparentOrder,
     evidence:
       n >= FEWEST_FOR_ORDERS
-        ? gatherEvidence(orders, weighable, byOrder(1), apparentOrder, criterionOf)
+        ? gatherEvidence(orders, weighable, ofOrder(orders, 1), apparentOrder, criterionOf)
         : null,
     exact: tried.some((fitted) => fitted.fit.rss <= leastRss(problem)),
     unit: problem.valueScale,
-    plainFirst: byOrder(1),
+    plainFirst,
   };
   return series.level === true ? withLevel(plain, problem, series, readings, forced) : plain;
+}
+
+/** The fits of one well by kind. */
+interface PlainFits {
+  orders: FittedOrder[];
+  saturation: FittedLaw | null;
+  forced: FittedOrder | null;
+}
+
+const ofOrder = (orders: readonly FittedOrder[], order: number) =>
+  orders.find(({ law }) => law.order === order)!.relative;
+
+/** Rounds of fitting with weights from the curve fitted before. */
+const WEIGHING_ROUNDS = 4;
+
+/** All laws fitted with one set of weights, that of the law which describes the readings best. */
+function weighFits(
+  problem: FitProblem,
+  plain: PlainFits,
+  precision: Precision,
+  series: DecaySeries,
+  readings: Readings,
+): PlainFits {
+  let fits = plain;
+  for (let round = 0; round < WEIGHING_ROUNDS; round += 1) {
+    const all = [...fits.orders, ...(fits.saturation === null ? [] : [fits.saturation])];
+    const best = all.reduce((a, b) => (b.criterion < a.criterion ? b : a));
+    const { roots } = best.problem;
+    const curve = residualsOfLaw(best).map(
+      (residual, i) => problem.y[i]! - residual / problem.valueScale / (roots?.[i] ?? 1),
+    );
+    const heavy = weighted(problem, curve, precision);
+    fits = {
+      orders: plain.orders.map((fitted) => weighOrder(heavy, fitted, series, readings)),
+      saturation: plain.saturation && weighSaturation(heavy, plain.saturation, series, readings),
+      forced: plain.forced && weighOrder(heavy, plain.forced, series, readings),
+    };
+  }
+  return fits;
 }
 
 /**

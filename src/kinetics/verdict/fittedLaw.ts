@@ -9,6 +9,7 @@ import {
   saturatingResiduals,
   type SaturatingFit,
 } from '../fitting/fitSaturating';
+import { fitSaturatingWeighted, fitWeighted } from '../fitting/fitWeighted';
 import type { FitProblem } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
 import type { RateLaw } from '../rateLaws/rateLaw';
@@ -43,7 +44,25 @@ export function fitOrder(
   series: DecaySeries,
   readings: Readings,
 ): FittedOrder {
-  const relative = fitLaw(problem, law);
+  return describeOrder(fitLaw(problem, law), series, readings);
+}
+
+/** The same, fitted to weighted readings from the fit without weights. */
+export function weighOrder(
+  problem: FitProblem,
+  { relative }: FittedOrder,
+  series: DecaySeries,
+  readings: Readings,
+): FittedOrder {
+  return describeOrder(fitWeighted(problem, relative), series, readings);
+}
+
+function describeOrder(
+  relative: RelativeFit,
+  series: DecaySeries,
+  readings: Readings,
+): FittedOrder {
+  const { law, problem } = relative;
   const described = describeFit(relative, series, readings);
   return {
     fit: described.fit,
@@ -75,6 +94,27 @@ export function fitSaturation(
   readings: Readings,
 ): FittedLaw | null {
   const saturating = fitSaturating(problem, scaled(first, problem), scaled(zero, problem));
+  return describeSaturation(saturating, problem, series, readings);
+}
+
+/** The same, fitted to weighted readings from the fit without weights. */
+export function weighSaturation(
+  problem: FitProblem,
+  { saturating }: FittedLaw,
+  series: DecaySeries,
+  readings: Readings,
+): FittedLaw | null {
+  if (saturating === null) return null;
+  const found = fitSaturatingWeighted(problem, saturating);
+  return describeSaturation(found, problem, series, readings);
+}
+
+function describeSaturation(
+  saturating: SaturatingFit,
+  problem: FitProblem,
+  series: DecaySeries,
+  readings: Readings,
+): FittedLaw | null {
   if (!Number.isFinite(saturating.rss)) return null;
   const described = describeSaturating(saturating, problem, series, readings);
   const parameters = problem.mode === 'fraction' ? 2 : 3;
