@@ -210,7 +210,8 @@ function describeReactingWell(
   const rates = fits.laws
     .filter((fitted) => fitted.name !== 'order')
     .map((fitted) => ({ ...fitted.initialRate, criterion: fitted.criterion }));
-  const k = isAsserted ? rateConstantOf(shown) : null;
+  const known = series.belowLimit?.includes(true) !== true;
+  const k = isAsserted ? rateConstantOf(shown, known) : null;
   return {
     ...blank,
     verdict: isForced ? 'forced' : misses ? 'other' : selection.verdict,
@@ -238,10 +239,14 @@ function describeReactingWell(
   };
 }
 
-/** k with its interval: by profile where the plain one misleads. */
-function rateConstantOf({ fit, relative }: FittedLaw): Estimate | null {
+/**
+ * k with its interval: by profile where the plain one misleads.
+ *
+ * @param known false where readings lie below a limit, which the profile does not count
+ */
+function rateConstantOf({ fit, relative }: FittedLaw, known: boolean): Estimate | null {
   const plain = estimate(fit.k, fit.kSe, fit.dof);
-  if (plain?.se == null || relative === null || !(plain.value > 0)) return plain;
+  if (!known || plain?.se == null || relative === null || !(plain.value > 0)) return plain;
   const profile = profileRateConstant(relative, plain.se / plain.value);
   if (profile === null) return plain;
   return {

@@ -67,6 +67,11 @@ export interface DecaySeries {
   law: LawRequest;
   /** Declared precision of the readings; without it their noise is constant and estimated. */
   precision?: Precision | null;
+  /**
+   * True where the reading is only known to lie below its value, a limit of quantification; same
+   * length as `values`.
+   */
+  belowLimit?: readonly boolean[] | null;
   /** Fits a level that stays: C∞, or the baseline of a signal. */
   level?: boolean;
 }

@@ -74,7 +74,7 @@ function sumEvidence(wells: readonly JudgedWell[]): Evidence {
     rivals,
     rivalCharge: 0,
     coverage: poolCoverage(wells),
-    withLevel: wells.every(({ evidence }) => evidence.withLevel === true),
+    unguarded: wells.every(({ evidence }) => evidence.unguarded === true),
   };
 }
 

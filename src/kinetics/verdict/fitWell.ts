@@ -9,6 +9,7 @@ import { aicc, akaikeWeights } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
 import type { DecaySeries, LawFit, Precision, RateLawName } from '../types';
 import {
+  censorOrder,
   fitOrder,
   fitOrderWithLevel,
   fitSaturation,
@@ -77,11 +78,12 @@ export function fitWell(
     fitsTo.saturation = fitSaturation(problem, plainFirst, zero, series, readings);
   }
   const precision = series.precision ?? null;
-  const {
-    orders,
-    saturation,
-    forced: another,
-  } = precision === null ? fitsTo : weighFits(problem, fitsTo, precision, series, readings);
+  const below = readings.indices.map((i) => series.belowLimit?.[i] === true);
+  const censored = below.includes(true);
+  let fits = fitsTo;
+  if (censored) fits = censorFits(problem, below, fitsTo, series, readings);
+  else if (precision !== null) fits = weighFits(problem, fitsTo, precision, series, readings);
+  const { orders, saturation, forced: another } = fits;
   const weighable = saturation !== null && n >= FEWEST_FOR_SATURATION ? saturation : null;
   const tried: FittedLaw[] = weighable === null ? orders : [...orders, weighable];
   const weights = n >= FEWEST_FOR_ORDERS ? akaikeWeights(tried.map((one) => one.criterion)) : null;
@@ -92,14 +94,16 @@ export function fitWell(
   const byName: WellFits['byName'] = {};
   for (const fitted of laws) byName[fitted.name] = fitted.fit;
 
-  const apparentOrder = fitApparentOrder(orders.map((fitted) => fitted.relative));
+  const apparentOrder = censored ? null : fitApparentOrder(orders.map((fitted) => fitted.relative));
   const plain: WellFits = {
     laws,
     byName,
     apparentOrder,
     evidence:
       n >= FEWEST_FOR_ORDERS
-        ? gatherEvidence(orders, weighable, ofOrder(orders, 1), apparentOrder, criterionOf)
+        ? censored
+          ? unguarded(orders)
+          : gatherEvidence(orders, weighable, ofOrder(orders, 1), apparentOrder, criterionOf)
         : null,
     exact: tried.some((fitted) => fitted.fit.rss <= leastRss(problem)),
     unit: problem.valueScale,
@@ -117,6 +121,34 @@ interface PlainFits {
 
 const ofOrder = (orders: readonly FittedOrder[], order: number) =>
   orders.find(({ law }) => law.order === order)!.relative;
+
+/**
+ * All laws that have an order, by their likelihood where readings lie below a limit. The others are
+ * not tried then: the choice rests on these alone.
+ */
+function censorFits(
+  problem: FitProblem,
+  below: readonly boolean[],
+  plain: PlainFits,
+  series: DecaySeries,
+  readings: Readings,
+): PlainFits {
+  const fit = (fitted: FittedOrder) => censorOrder(problem, below, fitted, series, readings);
+  return {
+    orders: plain.orders.map(fit),
+    saturation: null,
+    forced: plain.forced && fit(plain.forced),
+  };
+}
+
+/** Evidence of laws beside which neither a free order nor rivals were fitted. */
+const unguarded = (laws: readonly FittedLaw[]): Evidence => ({
+  laws: laws.map(({ name, law, criterion }) => ({ name, order: law!.order, aicc: criterion })),
+  rivals: {},
+  rivalCharge: 0,
+  coverage: null,
+  unguarded: true,
+});
 
 /** Rounds of fitting with weights from the curve fitted before. */
 const WEIGHING_ROUNDS = 4;
@@ -176,19 +208,7 @@ function withLevel(
     laws: fitted,
     byName,
     apparentOrder: null,
-    evidence: !weighed
-      ? null
-      : {
-          laws: tried.map(({ name, law, criterion }) => ({
-            name,
-            order: law!.order,
-            aicc: criterion,
-          })),
-          rivals: {},
-          rivalCharge: 0,
-          coverage: null,
-          withLevel: true,
-        },
+    evidence: !weighed ? null : unguarded(tried),
     exact: tried.some(({ fit }) => fit.rss <= leastRss(problem)),
   };
 }

@@ -9,6 +9,7 @@ import {
   saturatingResiduals,
   type SaturatingFit,
 } from '../fitting/fitSaturating';
+import { fitCensored } from '../fitting/fitCensored';
 import { fitSaturatingWeighted, fitWeighted } from '../fitting/fitWeighted';
 import type { FitProblem } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
@@ -55,6 +56,17 @@ export function weighOrder(
   readings: Readings,
 ): FittedOrder {
   return describeOrder(fitWeighted(problem, relative), series, readings);
+}
+
+/** The same on readings of which some lie below a limit. */
+export function censorOrder(
+  problem: FitProblem,
+  below: readonly boolean[],
+  { relative }: FittedOrder,
+  series: DecaySeries,
+  readings: Readings,
+): FittedOrder {
+  return describeOrder(fitCensored(problem, below, relative), series, readings);
 }
 
 function describeOrder(

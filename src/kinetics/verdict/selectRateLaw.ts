@@ -19,8 +19,8 @@ export interface Evidence {
   rivalCharge: number;
   /** Coverage σ of the saturating fit, and whether its interval lies inside the law. */
   coverage: { value: number; bounded: boolean } | null;
-  /** True where every law has a level that stays, and no free order stands beside them. */
-  withLevel?: boolean;
+  /** True where neither a free order nor rivals stand beside the laws. */
+  unguarded?: boolean;
 }
 
 /** Free order with its standard error. */
@@ -38,8 +38,8 @@ export interface Selection {
 
 /** An order is asserted when it has this many times the support of each other order. */
 export const EVIDENCE_TO_ASSERT = 10;
-/** The same where a level is fitted too, which bends a curve as an order does. */
-export const EVIDENCE_BESIDE_LEVEL = 100;
+/** The same where nothing else guards the choice. */
+export const EVIDENCE_UNGUARDED = 100;
 /** A rival must have this many times the support of the best order to say that none holds. */
 export const EVIDENCE_FOR_OTHER = 30;
 /**
@@ -114,7 +114,7 @@ export function selectRateLaw(evidence: Evidence, free: FreeOrder | null): Selec
   if (evidenceRatio(strongest, best.aicc) >= EVIDENCE_FOR_OTHER) {
     return refuse('other', 'no-simple-order');
   }
-  const needed = evidence.withLevel === true ? EVIDENCE_BESIDE_LEVEL : EVIDENCE_TO_ASSERT;
+  const needed = evidence.unguarded === true ? EVIDENCE_UNGUARDED : EVIDENCE_TO_ASSERT;
   if (evidenceRatio(best.aicc, ranked[1]!.aicc) < needed) {
     return refuse('undetermined', 'laws-equally-good');
   }
@@ -126,7 +126,7 @@ export function selectRateLaw(evidence: Evidence, free: FreeOrder | null): Selec
   ) {
     return refuse('undetermined', 'no-simple-order');
   }
-  if (evidence.withLevel !== true && !orderAgrees(free, best.order))
+  if (evidence.unguarded !== true && !orderAgrees(free, best.order))
     return refuse('undetermined', 'order-uncertain');
   return {
     verdict: best.name as 'zero' | 'first' | 'second',

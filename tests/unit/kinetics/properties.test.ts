@@ -181,6 +181,11 @@ describe('whatever comes', { timeout: 30_000 }, () => {
       loadingGPerL: fc.constantFrom(null, 2.5, 1e-300),
       siteDensityMolPerKg: fc.constantFrom(null, 0.05),
       level: fc.boolean(),
+      belowLimit: fc.constantFrom(
+        null,
+        [true, false, true],
+        [false, false, false, false, true, true],
+      ),
       precision: fc.constantFrom(
         null,
         { absolute: 1e-4, relative: 0.02 },
