@@ -1,26 +1,24 @@
 import { fitApparentOrder, type ApparentOrderFit } from '../fitting/fitApparentOrder';
 import { fitDepartures } from '../fitting/fitDepartures';
 import type { RelativeFit } from '../fitting/fitLaw';
-import { weighted } from '../fitting/fitWeighted';
-import { scaleReadings, type FitProblem } from '../fitting/problem';
+import { scaleReadings } from '../fitting/problem';
 import type { Readings } from '../fitting/readings';
 import { rateLaws, type RequestedLaw } from '../rateLaws/registry';
 import { aicc, akaikeWeights } from '../statistics/goodnessOfFit';
 import { intervalFactor } from '../statistics/tDistribution';
-import type { DecaySeries, LawFit, Precision, RateLawName } from '../types';
+import type { DecaySeries, LawFit, RateLawName } from '../types';
 import {
-  censorOrder,
+  FEWEST_FOR_SATURATION,
   fitOrder,
-  fitOrderWithLevel,
   fitSaturation,
+  lawEvidence,
   leastRss,
-  residualsOfLaw,
-  weighOrder,
-  weighSaturation,
   type FittedLaw,
   type FittedOrder,
 } from './fittedLaw';
-import type { Evidence } from './selectRateLaw';
+import { censorFits, ofOrder, weighFits, type PlainFits } from './givenNoise';
+import { unguardedEvidence, type Evidence } from './selectRateLaw';
+import { withLevel } from './withLevel';
 
 /** Everything fitted to one well. */
 export interface WellFits {
@@ -40,8 +38,6 @@ export interface WellFits {
 }
 
 const FEWEST_FOR_ORDERS = 5;
-/** AICc of three parameters and the noise needs one more. */
-const FEWEST_FOR_SATURATION = 6;
 /** Where K is bounded on both sides: the coverage's 95 % interval lies within these. */
 const LEAST_COVERAGE = 0.02;
 const MOST_COVERAGE = 0.98;
@@ -102,7 +98,7 @@ export function fitWell(
     evidence:
       n >= FEWEST_FOR_ORDERS
         ? censored
-          ? unguarded(orders)
+          ? unguardedEvidence(orders.map(lawEvidence))
           : gatherEvidence(orders, weighable, ofOrder(orders, 1), apparentOrder, criterionOf)
         : null,
     exact: tried.some((fitted) => fitted.fit.rss <= leastRss(problem)),
@@ -110,107 +106,6 @@ export function fitWell(
     plainFirst,
   };
   return series.level === true ? withLevel(plain, problem, series, readings, forced) : plain;
-}
-
-/** The fits of one well by kind. */
-interface PlainFits {
-  orders: FittedOrder[];
-  saturation: FittedLaw | null;
-  forced: FittedOrder | null;
-}
-
-const ofOrder = (orders: readonly FittedOrder[], order: number) =>
-  orders.find(({ law }) => law.order === order)!.relative;
-
-/**
- * All laws that have an order, by their likelihood where readings lie below a limit. The others are
- * not tried then: the choice rests on these alone.
- */
-function censorFits(
-  problem: FitProblem,
-  below: readonly boolean[],
-  plain: PlainFits,
-  series: DecaySeries,
-  readings: Readings,
-): PlainFits {
-  const fit = (fitted: FittedOrder) => censorOrder(problem, below, fitted, series, readings);
-  return {
-    orders: plain.orders.map(fit),
-    saturation: null,
-    forced: plain.forced && fit(plain.forced),
-  };
-}
-
-/** Evidence of laws beside which neither a free order nor rivals were fitted. */
-const unguarded = (laws: readonly FittedLaw[]): Evidence => ({
-  laws: laws.map(({ name, law, criterion }) => ({ name, order: law!.order, aicc: criterion })),
-  rivals: {},
-  rivalCharge: 0,
-  coverage: null,
-  unguarded: true,
-});
-
-/** Rounds of fitting with weights from the curve fitted before. */
-const WEIGHING_ROUNDS = 4;
-
-/** All laws fitted with one set of weights, that of the law which describes the readings best. */
-function weighFits(
-  problem: FitProblem,
-  plain: PlainFits,
-  precision: Precision,
-  series: DecaySeries,
-  readings: Readings,
-): PlainFits {
-  let fits = plain;
-  for (let round = 0; round < WEIGHING_ROUNDS; round += 1) {
-    const all = [...fits.orders, ...(fits.saturation === null ? [] : [fits.saturation])];
-    const best = all.reduce((a, b) => (b.criterion < a.criterion ? b : a));
-    const { roots } = best.problem;
-    const curve = residualsOfLaw(best).map(
-      (residual, i) => problem.y[i]! - residual / problem.valueScale / (roots?.[i] ?? 1),
-    );
-    const heavy = weighted(problem, curve, precision);
-    fits = {
-      orders: plain.orders.map((fitted) => weighOrder(heavy, fitted, series, readings)),
-      saturation: plain.saturation && weighSaturation(heavy, plain.saturation, series, readings),
-      forced: plain.forced && weighOrder(heavy, plain.forced, series, readings),
-    };
-  }
-  return fits;
-}
-
-/**
- * Fits the laws that have an order with a level that stays. Without a free order beside it the choice
- * between them rests on their evidence alone, at ten times the usual ratio.
- *
- * @param plain the same well's fits without a level, which stand in where no approach is found
- */
-function withLevel(
-  plain: WellFits,
-  problem: FitProblem,
-  series: DecaySeries,
-  readings: Readings,
-  forced: RequestedLaw | null,
-): WellFits {
-  const wanted = forced?.law != null && !rateLaws.includes(forced.law) ? [forced.law] : [];
-  const fitted = [...rateLaws, ...wanted].flatMap(
-    (law) => fitOrderWithLevel(problem, law, series, readings) ?? [],
-  );
-  if (fitted.length < rateLaws.length) return plain;
-  const tried = fitted.slice(0, rateLaws.length);
-  const weights = akaikeWeights(tried.map(({ criterion }) => criterion));
-  const weighed = readings.values.length >= FEWEST_FOR_SATURATION;
-  tried.forEach(({ fit }, i) => (fit.weight = weighed ? weights[i]! : null));
-  const byName: WellFits['byName'] = {};
-  for (const { name, fit } of fitted) byName[name] = fit;
-  return {
-    ...plain,
-    laws: fitted,
-    byName,
-    apparentOrder: null,
-    evidence: !weighed ? null : unguarded(tried),
-    exact: tried.some(({ fit }) => fit.rss <= leastRss(problem)),
-  };
 }
 
 function gatherEvidence(
@@ -231,7 +126,7 @@ function gatherEvidence(
   const parameters = orders[0]!.parameters;
   const unit = first.problem.valueScale ** 2;
   return {
-    laws: orders.map(({ name, law, criterion }) => ({ name, order: law.order, aicc: criterion })),
+    laws: orders.map(lawEvidence),
     rivals,
     rivalCharge: (criterionOf(unit, parameters + 1) ?? 0) - (criterionOf(unit, parameters) ?? 0),
     coverage: saturation === null ? null : coverageRange(saturation),

@@ -17,6 +17,10 @@ import type { RateLaw } from '../rateLaws/rateLaw';
 import { aicc } from '../statistics/goodnessOfFit';
 import { rateConstantUnit } from '../rateLaws/rateConstantUnit';
 import type { DecaySeries, RateLawName, ReadingDimension } from '../types';
+import type { LawEvidence } from './selectRateLaw';
+
+/** AICc of three parameters and the noise needs one more. */
+export const FEWEST_FOR_SATURATION = 6;
 
 /** One law with its fit to one well. */
 export interface FittedLaw extends DescribedFit {
@@ -189,6 +193,13 @@ function criterionOf(problem: FitProblem, rss: number, parameters: number): numb
 const scaled = ({ kRel, rss }: RelativeFit, { timeScale, valueScale }: FitProblem) => ({
   kRel: (kRel ?? 0) * timeScale,
   rss: rss / valueScale ** 2,
+});
+
+/** What a choice between laws that have an order needs of a fit. */
+export const lawEvidence = ({ name, law, criterion }: FittedLaw): LawEvidence => ({
+  name,
+  order: law?.order ?? NaN,
+  aicc: criterion,
 });
 
 /** Readings less the curve, in the reading's base unit, in time order. */

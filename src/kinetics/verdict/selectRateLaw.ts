@@ -23,6 +23,15 @@ export interface Evidence {
   unguarded?: boolean;
 }
 
+/** Evidence of laws beside which neither a free order nor rivals were fitted. */
+export const unguardedEvidence = (laws: LawEvidence[]): Evidence => ({
+  laws,
+  rivals: {},
+  rivalCharge: 0,
+  coverage: null,
+  unguarded: true,
+});
+
 /** Free order with its standard error. */
 export type FreeOrder = Pick<ApparentOrderFit, 'order' | 'orderSe' | 'dof'>;
 
