@@ -64,6 +64,8 @@ const WARNINGS: Record<WarningCode, string> = {
     'After the blank is taken off no rate is left; raise the loading, or find what reacts in the blank.',
   'level-by-request':
     'A level that stays was fitted as asked; k is that of the approach to it. Ask whether it is an inert remainder, an equilibrium or a baseline: time and rate at the reference are not given.',
+  'rate-below-mass':
+    'The rate grows less than in proportion to the catalyst, so something else limits it, as supply of gas or transport to the particles; rates per gram do not compare: use less catalyst or stir harder.',
   'extrapolated-temperature':
     'The reference temperature lies outside the measured ones, so figures there rest on the line alone; measure closer to it.',
   'extrapolated-concentration':

@@ -180,6 +180,7 @@ export type WarningCode =
   | 'blank-reacts'
   | 'blank-subtracted'
   | 'not-above-blank'
+  | 'rate-below-mass'
   | 'level-by-request'
   | 'extrapolated-temperature'
   | 'extrapolated-concentration'
@@ -354,6 +355,8 @@ export interface CatalystAnalysis {
   eyring: ActivationParameters | null;
   /** True when rateRef and timeToTarget are brackets between orders 0 and 2. */
   bracket: boolean;
+  /** m of rate ∝ loadingᵐ, where a screen varied it; 1 in the kinetic regime. */
+  massOrder: Estimate | null;
   /** g/L that k was brought to; null when per well. */
   loadingGPerL: number | null;
   arrhenius: ArrheniusLine | null;

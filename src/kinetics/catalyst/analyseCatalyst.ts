@@ -17,6 +17,7 @@ import { fitOneStep } from './fitOneStep';
 import { describeByInitialRate } from './initialRateBasis';
 import { anyDecay } from './jointDecay';
 import { describeByLaw } from './lawBasis';
+import { growsTooLittle, massOrder } from './massOrder';
 import { poolEvidence, type PooledVerdict } from './poolEvidence';
 import { fitUnder, type BasisResult, type PooledWell } from './pooledWell';
 import { poolLoading } from './poolLoading';
@@ -88,6 +89,8 @@ export function analyseCatalyst(
       warnings.push('not-above-blank');
     }
   }
+  const byMass = massOrder(pooled);
+  if (growsTooLittle(byMass)) warnings.push('rate-below-mass');
   const { net, ...figures } = basis;
   const oneStep = net
     ? null
@@ -108,6 +111,7 @@ export function analyseCatalyst(
     rateRefPerMass,
     turnoverFrequency: perSite(rateRefPerMass, pooled),
     eyring: decided.law === 'first' ? perSiteActivation(basis, loading.loadingGPerL, pooled) : null,
+    massOrder: byMass,
     loadingGPerL: pooled.length > 0 ? loading.loadingGPerL : null,
     conversion: largest(same.map((well) => well.analysis.conversion)),
     relativeResidualSd: relativeResidualSd(fits),

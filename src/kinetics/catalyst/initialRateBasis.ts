@@ -55,7 +55,7 @@ export function describeByInitialRate(
     kRefTemperatureK: null,
     rateRef,
     timeToTarget,
-    net,
+    net: net && wells.some(takesOff),
     bracket: rateRef !== null || timeToTarget !== null,
     arrhenius: line,
     activationEnergy: null,
@@ -64,6 +64,10 @@ export function describeByInitialRate(
     adsorption: null,
   };
 }
+
+/** True where the blank beside a well reacts. */
+const takesOff = ({ analysis: { initialRate, net } }: PooledWell) =>
+  net?.initialRate != null && net.initialRate.value !== initialRate?.value;
 
 type RateOf = (well: PooledWell) => Estimate | null;
 

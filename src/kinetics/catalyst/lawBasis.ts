@@ -90,7 +90,7 @@ export function describeByLaw(
       beside === null || beside.k === 0 || x === null
         ? timeFromConstant(atReference, lnTime)
         : timeBesideBlank(atReference, law, beside, c, x),
-    net: netKnown,
+    net: netKnown && nets.some((one) => (one?.blank.k ?? 0) > 0),
     bracket: false,
     arrhenius: line,
     activationEnergy: line === null ? null : activationEnergyOf(line),

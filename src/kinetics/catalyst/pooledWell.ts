@@ -16,7 +16,7 @@ export type BasisResult = Pick<
   | 'lnA'
   | 'adsorption'
 > & {
-  /** True when the blanks' rate was taken off. */
+  /** True when the rate of blanks that react was taken off. */
   net: boolean;
 };
 
