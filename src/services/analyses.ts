@@ -4,9 +4,9 @@ import type { AnalysisSummary } from '../contracts/screens';
 import type { Database } from '../db/client';
 import { findAnalysis, listCatalystResults, listWellFits } from '../db/repositories/analyses';
 import { problems } from '../errors';
-import type { CatalystAnalysis, SeriesAnalysis } from '../kinetics/types';
 import { summariseAnalysis } from './screens';
 import type { Services } from './services';
+import { readCatalystAnalysis, readSeriesAnalysis } from './storedResults';
 
 /** The state of an analysis; with its results once it is done. */
 export interface AnalysisView {
@@ -44,8 +44,8 @@ export async function viewAnalysis(
     analysis,
     results: batchResponse({
       engine: analysis.engine,
-      series: fits.map((fit) => JSON.parse(fit.result) as SeriesAnalysis),
-      catalysts: catalysts.map((one) => JSON.parse(one.result) as CatalystAnalysis),
+      series: fits.map((fit) => readSeriesAnalysis(fit.result)),
+      catalysts: catalysts.map((one) => readCatalystAnalysis(one.result)),
     }),
   };
 }

@@ -20,6 +20,7 @@ import { summariseCampaign } from './campaigns';
 import { loadDecision, requireCatalyst } from './candidates';
 import { loadCurrentAnalyses, loadCurrentResults, type CurrentResult } from './currentAnalyses';
 import { unpackFloats, unpackIntegers } from './readingsCodec';
+import { readCatalystAnalysis, readSeriesAnalysis } from './storedResults';
 
 const inWords = (codes: SeriesAnalysis['warnings']) =>
   codes.map((code) => ({ code, sentence: explainWarning(code) }));
@@ -77,7 +78,7 @@ async function loadWells(
   const fitOf = new Map(fits.map((fit) => [fit.wellId, fit.result]));
   return wells.flatMap((well) => {
     const fit = fitOf.get(well.well.id);
-    return fit ? [wellView(well, JSON.parse(fit) as SeriesAnalysis)] : [];
+    return fit ? [wellView(well, readSeriesAnalysis(fit))] : [];
   });
 }
 
@@ -123,7 +124,7 @@ export async function viewCandidate(
   const screen = current.screens.find((row) => row.screen.id === own?.row.screenId);
   if (!campaign || !own || !screen || !role) throw problems.notFound();
 
-  const result = JSON.parse(own.row.result) as CatalystAnalysis;
+  const result = readCatalystAnalysis(own.row.result);
   const [wells, analyses, decision, tags] = await Promise.all([
     loadWells(db, groupId, own),
     listAnalyses(db, groupId, [own.row.screenId]),

@@ -3,10 +3,10 @@ import type { Heatmap } from '../contracts/leaderboard';
 import type { Database } from '../db/client';
 import { listSetTemperatures, listWellFits } from '../db/repositories/analyses';
 import { lawOfOrder } from '../kinetics';
-import type { CatalystAnalysis, SeriesAnalysis } from '../kinetics/types';
 import { heatmapCells, type HeatmapWell } from '../screening/heatmap';
 import { requireCampaign, summariseCampaign } from './campaigns';
 import { loadCurrentAnalyses, loadCurrentResults } from './currentAnalyses';
+import { readCatalystAnalysis, readSeriesAnalysis } from './storedResults';
 
 /** Wells of one analysis by catalyst, each with the temperature its plate was set to. */
 async function wellsByCatalyst(
@@ -20,7 +20,7 @@ async function wellsByCatalyst(
   ]);
   const wells = new Map<string, HeatmapWell[]>();
   for (const fit of fits) {
-    const analysis = JSON.parse(fit.result) as SeriesAnalysis;
+    const analysis = readSeriesAnalysis(fit.result);
     const setTemperatureK = temperatures.get(fit.wellId) ?? analysis.temperatureK;
     if (fit.catalystId === null) continue;
     const own = wells.get(fit.catalystId) ?? [];
@@ -50,7 +50,7 @@ export async function viewHeatmap(
   }
   const rows = results.map(({ row }) => ({
     row,
-    result: JSON.parse(row.result) as CatalystAnalysis,
+    result: readCatalystAnalysis(row.result),
     wells: wellsOf.get(row.analysisId)?.get(row.catalystId) ?? [],
   }));
   const temperaturesK = [

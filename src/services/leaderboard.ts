@@ -7,6 +7,7 @@ import type { CatalystAnalysis } from '../kinetics/types';
 import { requireCampaign, summariseCampaign } from './campaigns';
 import { loadCurrentAnalyses, loadCurrentResults, type CurrentResult } from './currentAnalyses';
 import { rankingsOf } from './rankings';
+import { readCatalystAnalysis } from './storedResults';
 
 type Unplaced = Omit<LeaderboardRow, 'ranks' | 'tags' | 'decision'>;
 
@@ -62,7 +63,7 @@ export async function viewLeaderboard(
   ]);
   const candidates = [...results.values()].map((current) => ({
     current,
-    result: JSON.parse(current.row.result) as CatalystAnalysis,
+    result: readCatalystAnalysis(current.row.result),
   }));
   const ranks = rankingsOf(
     campaignId,
