@@ -35,6 +35,7 @@ export interface WorkerPools {
 const workbookSeconds = 60;
 const workbookMegabytes = 512;
 const waitingBatches = 32;
+const youngMegabytes = 64;
 /** From this size on several threads share a batch, each some parts of it. */
 const largeBatchBytes = 250_000;
 const partsOfAThread = 4;
@@ -91,6 +92,8 @@ export function openWorkerPools(folder: string, threads = availableParallelism()
     maxThreads: threads,
     idleTimeout: 60_000,
     maxQueue: waitingBatches,
+    // Fits leave much that is short-lived; clearing it away less often leaves the cores to them.
+    resourceLimits: { maxYoungGenerationSizeMb: youngMegabytes },
   });
   const workbooks = new Piscina({
     minThreads: 0,
